@@ -105,6 +105,7 @@ export default tseslint.config(
       'import-x/resolver-next': [
         createTypeScriptImportResolver({
           project: ['shared/tsconfig.json', 'service/tsconfig.json', 'dashboard/tsconfig.json'],
+          noWarnOnMultipleProjects: true,
         }),
       ],
     },
@@ -160,11 +161,11 @@ export default tseslint.config(
     files: ['service/src/cli/**', 'shared/accuracy/**', 'shared/bench/**', 'service/bench/**'],
     rules: { 'no-console': 'off' },
   },
+  { files: ['**/*.{js,mjs}'], ...tseslint.configs.disableTypeChecked },
   {
     files: ['**/*.{js,mjs}'],
-    ...tseslint.configs.disableTypeChecked,
     languageOptions: { globals: globals.node },
+    rules: { 'no-console': 'off' },
   },
-  { files: ['**/*.{js,mjs}'], rules: { 'no-console': 'off' } },
   prettier,
 );

@@ -23,7 +23,12 @@ const steps = [
     report: 'service.json',
     needs: ['build shared', 'build service'],
   },
-  { name: 'dashboard', command: 'npm run test -w dashboard', report: 'dashboard.json', needs: ['build shared'] },
+  {
+    name: 'dashboard',
+    command: 'npm run test -w dashboard',
+    report: 'dashboard.json',
+    needs: ['build shared'],
+  },
   {
     name: 'browser',
     command: 'npm run e2e -w dashboard',
