@@ -34,7 +34,12 @@ export interface CharacteristicGeometry {
   readonly plot: Box;
   readonly travelTicks: readonly Tick[];
   readonly valueTicks: readonly Tick[];
-  readonly points: readonly (Place & { readonly radius: number })[];
+  readonly points: readonly (Place & {
+    readonly radius: number;
+    readonly travel: number;
+    readonly value: number;
+    readonly count: number;
+  })[];
   /** fitted curve over the travel visited, and up to 5 % of travel beyond it */
   readonly fitted: string;
   readonly beyondFitted: string;
@@ -106,6 +111,7 @@ export function characteristicChart(
     travelTicks: travelTicks(plot.left, plot.right),
     valueTicks: y.ticks,
     points: points.map((point) => ({
+      ...point,
       x: x(point.travel),
       y: y.place(point.value),
       radius: 2 + 3.5 * Math.sqrt(point.count / mostSamples),

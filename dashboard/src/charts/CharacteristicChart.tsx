@@ -1,0 +1,93 @@
+import { characteristicChart } from '@tailrace/shared/charts/characteristic-chart';
+import { figureText } from '@tailrace/shared/charts/figure-text';
+import { type PresentedAssessment } from '@tailrace/shared/contracts/assessments';
+import { useState } from 'react';
+import { AcrossAxis, UpAxis } from './Axes';
+import { CharacteristicMarks, CurveName } from './CharacteristicMarks';
+import { ChartFrame, Tool, type Drawing } from './ChartFrame';
+import { basisInWords, characteristicInWords, percentilesInWords } from './chart-words';
+import { inks } from './inks';
+import { RidgeMarks } from './RidgeMarks';
+
+interface CharacteristicChartProps {
+  /** the valve's tag, for the name of a saved file */
+  tag: string;
+  characteristic: NonNullable<PresentedAssessment['characteristic']>;
+  range: PresentedAssessment['range'];
+  deviation: PresentedAssessment['deviation'];
+}
+
+/** What was found of the characteristic, over what was specified, above the travel it was found from. */
+export function CharacteristicChart({ tag, characteristic, range, deviation }: CharacteristicChartProps) {
+  const [axis, setAxis] = useState<'linear' | 'log'>('linear');
+  const { unit, points, specified, pressureDrop } = characteristic;
+  const quantity = `${pressureDrop === 'none' ? 'Flow' : 'Flow coefficient'}, ${unit}`;
+  const basis = basisInWords(pressureDrop);
+  const ridge = range && { ...range, shares: range.ridge };
+
+  const draw = (size: { width: number; height: number }): Drawing => {
+    const geometry = characteristicChart(characteristic, ridge, size, axis);
+    const { plot, asFoundLabel, specifiedLabel } = geometry;
+    return {
+      marks: (
+        <>
+          <UpAxis ticks={geometry.valueTicks} plot={plot} title={`${quantity}, ${basis}`} />
+          <CharacteristicMarks geometry={geometry} />
+          <CurveName label={specifiedLabel}>specified, with its tolerance</CurveName>
+          <CurveName label={asFoundLabel} strong>
+            as found
+          </CurveName>
+          {ridge && (
+            <text x={plot.left} y={plot.bottom + 20} fill={inks.quiet}>
+              {percentilesInWords(ridge)}
+            </text>
+          )}
+          <RidgeMarks geometry={geometry.ridge} />
+          <AcrossAxis
+            ticks={geometry.travelTicks}
+            y={size.height - 36}
+            right={plot.right}
+            title="Travel, %"
+          />
+        </>
+      ),
+      series: [
+        {
+          name: 'As found',
+          readings: geometry.points.map((point) => ({
+            x: point.x,
+            y: point.y,
+            text: `${figureText(point.travel)} % travel, ${figureText(point.value)} ${unit} from ${point.count} windows`,
+          })),
+        },
+        {
+          name: 'Specified',
+          readings: specified.map(({ travel, value, low, high }) => ({
+            ...geometry.place(travel, value),
+            text: `${figureText(travel)} % travel, ${figureText(value)} ${unit}, tolerance ${figureText(low)} to ${figureText(high)}`,
+          })),
+        },
+      ],
+    };
+  };
+
+  return (
+    <ChartFrame
+      title="Effective characteristic"
+      note={`${quantity}, against travel in %; ${basis}`}
+      summary={characteristicInWords(characteristic, deviation)}
+      fileName={`${tag} characteristic`}
+      height={(width) => (width < 560 ? 420 : 500)}
+      tools={
+        <Tool pressed={axis === 'log'} onClick={() => setAxis(axis === 'log' ? 'linear' : 'log')}>
+          Log axis
+        </Tool>
+      }
+      table={{
+        columns: ['Travel, %', `As found, ${unit}`, 'Steady windows'],
+        rows: points.map((point) => [figureText(point.travel), figureText(point.value), String(point.count)]),
+      }}
+      draw={draw}
+    />
+  );
+}
