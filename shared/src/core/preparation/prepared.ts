@@ -13,17 +13,21 @@ export const valveState = {
   outage: 32,
 } as const;
 
+/** A regular grid of times: point i is at `start + i·step` s. */
+export interface Grid {
+  readonly start: number;
+  /** s */
+  readonly step: number;
+  readonly count: number;
+}
+
 /**
  * The record on one regular grid, cleaned and aligned: the only form the chapters after §1 read.
  *
  * Column i is at `start + i·step` s. A column holds NaN wherever the value is not known (gap, bad, frozen,
  * rejected). Flow and pressures are already moved by the lag between position and flow.
  */
-export interface Prepared {
-  readonly start: number;
-  /** s */
-  readonly step: number;
-  readonly count: number;
+export interface Prepared extends Grid {
   /** % : position, or demand standing in for it */
   readonly travel: Float64Array;
   readonly travelSource: 'position' | 'demand';
@@ -48,7 +52,7 @@ export interface Prepared {
   readonly lag: { readonly seconds: number; readonly identified: boolean };
   /** proxy of the archive's tolerance (§1.2) */
   readonly resolution: { readonly travel: number | null; readonly flow: number | null };
-  /** median spacing of stored samples by signal, s */
+  /** scan by signal, s: the spacing of stored samples while the signal moves (pace.ts) */
   readonly spacing: { readonly travel: number; readonly flow: number | null; readonly demand: number | null };
   readonly samplesSeen: number;
   readonly samplesUsed: number;
