@@ -5,8 +5,7 @@ import { useState } from 'react';
 import { AcrossAxis, UpAxis } from './Axes';
 import { CharacteristicMarks, CurveName } from './CharacteristicMarks';
 import { ChartFrame, Tool, type Drawing } from './ChartFrame';
-import { basisInWords, characteristicInWords, percentilesInWords } from './chart-words';
-import { inks } from './inks';
+import { basisInWords, characteristicInWords, outsideTolerance } from './chart-words';
 import { RidgeMarks } from './RidgeMarks';
 
 interface CharacteristicChartProps {
@@ -25,6 +24,7 @@ export function CharacteristicChart({ tag, characteristic, range, deviation }: C
   const basis = basisInWords(pressureDrop);
   const ridge = range && { ...range, shares: range.ridge };
 
+  const outside = outsideTolerance(deviation);
   const draw = (size: { width: number; height: number }): Drawing => {
     const geometry = characteristicChart(characteristic, ridge, size, axis);
     const { plot, asFoundLabel, specifiedLabel } = geometry;
@@ -32,17 +32,12 @@ export function CharacteristicChart({ tag, characteristic, range, deviation }: C
       marks: (
         <>
           <UpAxis ticks={geometry.valueTicks} plot={plot} title={`${quantity}, ${basis}`} />
-          <CharacteristicMarks geometry={geometry} />
-          <CurveName label={specifiedLabel}>specified, with its tolerance</CurveName>
+          <CharacteristicMarks geometry={geometry} outside={outside} />
+          <CurveName label={specifiedLabel}>specified ± tolerance</CurveName>
           <CurveName label={asFoundLabel} strong>
             as found
           </CurveName>
-          {ridge && (
-            <text x={plot.left} y={plot.bottom + 20} fill={inks.quiet}>
-              {percentilesInWords(ridge)}
-            </text>
-          )}
-          <RidgeMarks geometry={geometry.ridge} />
+          {geometry.ridge && <RidgeMarks geometry={geometry.ridge} />}
           <AcrossAxis
             ticks={geometry.travelTicks}
             y={size.height - 36}
@@ -74,7 +69,10 @@ export function CharacteristicChart({ tag, characteristic, range, deviation }: C
   return (
     <ChartFrame
       title="Effective characteristic"
-      note={`${quantity}, against travel in %; ${basis}`}
+      note={
+        'Circles: median of steady windows, larger where there are more. Band: 2.5 to 97.5 % of day resamples.' +
+        (deviation ? ' Filled: shape outside the tolerance of IEC 60534-2-4.' : '')
+      }
       summary={characteristicInWords(characteristic, deviation)}
       fileName={`${tag} characteristic`}
       height={(width) => (width < 560 ? 420 : 500)}

@@ -1,14 +1,21 @@
 import { type CharacteristicGeometry, type CurveLabel } from '@tailrace/shared/charts/characteristic-chart';
+import { figureText } from '@tailrace/shared/charts/figure-text';
 import { type ReactNode } from 'react';
 import { inks } from './inks';
 
+interface CharacteristicMarksProps {
+  geometry: CharacteristicGeometry;
+  /** is the shape at this travel outside its tolerance? such points are filled */
+  outside: (travel: number) => boolean;
+}
+
 /** The curves, bands and points of the characteristic chart, from the quietest to what was found. */
-export function CharacteristicMarks({ geometry }: { geometry: CharacteristicGeometry }) {
-  const { plot, ridge } = geometry;
+export function CharacteristicMarks({ geometry, outside }: CharacteristicMarksProps) {
+  const { plot } = geometry;
   return (
     <g fill="none">
       <path d={geometry.tolerance} fill={inks.band} />
-      {ridge.percentiles.map(({ name, x }) => (
+      {geometry.ridge?.percentiles.map(({ name, x }) => (
         <path
           key={name}
           d={`M${x},${plot.top}V${plot.bottom}`}
@@ -16,6 +23,11 @@ export function CharacteristicMarks({ geometry }: { geometry: CharacteristicGeom
           strokeWidth={0.75}
           strokeDasharray="1 4"
         />
+      ))}
+      {geometry.percentileNames.map(({ name, travel, x }) => (
+        <text key={name} x={x} y={plot.bottom + 18} textAnchor="middle" fill={inks.quiet}>
+          {name} <tspan fill={inks.ink}>{figureText(travel)}</tspan>
+        </text>
       ))}
       <path d={geometry.specified} stroke={inks.quiet} strokeWidth={1.25} />
       <path d={geometry.fittedBand} fill={inks.ink} fillOpacity={0.18} />
@@ -25,8 +37,8 @@ export function CharacteristicMarks({ geometry }: { geometry: CharacteristicGeom
           cx={point.x}
           cy={point.y}
           r={point.radius}
-          fill={inks.paper}
-          stroke={inks.ink}
+          fill={outside(point.travel) ? inks.rust : inks.paper}
+          stroke={outside(point.travel) ? inks.rust : inks.ink}
           strokeWidth={1}
         />
       ))}

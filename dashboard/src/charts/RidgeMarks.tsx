@@ -3,14 +3,14 @@ import { inks } from './inks';
 
 /** The marks of a travel ridge: ridge, axis, percentile ticks and the bracket of the specified band. */
 export function RidgeMarks({ geometry }: { geometry: RidgeGeometry }) {
-  const { left, right, baseline } = geometry;
+  const { left, right, top, baseline } = geometry;
   return (
     <g fill="none">
       <path d={geometry.within} fill={inks.quiet} />
       <path d={geometry.beyond} fill={inks.rust} />
       <path d={geometry.hatch} stroke={inks.paper} strokeWidth={1} />
       {geometry.cuts.map((x) => (
-        <path key={x} d={`M${x - 7},7l14,-4`} stroke={inks.paper} strokeWidth={2} />
+        <path key={x} d={`M${x - 9},${top + 8}l18,-5`} stroke={inks.paper} strokeWidth={2} />
       ))}
       <path d={`M${left},${baseline}H${right}`} stroke={inks.line} />
       <path

@@ -183,3 +183,54 @@ export const sampleDeviation: NonNullable<PresentedAssessment['deviation']> = {
   })),
   suspectedUnitFactor: null,
 };
+
+export const sampleGain: NonNullable<PresentedAssessment['gain']> = {
+  points: travels(31, 65, 1).map((travel) => ({ travel, gain: 0.35 * Math.exp(0.055 * (travel - 31)) })),
+  min: { value: 0.35, low: 0.31, high: 0.4 },
+  max: { value: 2.3, low: 2.1, high: 2.5 },
+  ratio: { value: 6.5, low: 5.4, high: 7.8 },
+  absolute: true,
+};
+
+const day = (i: number) => new Date(Date.UTC(2026, 8, 1) + i * 86_400_000).toISOString();
+
+export const sampleMovement = {
+  threshold: 1,
+  reversalsPerDay: 412,
+  travelPerDay: 1840,
+  perDay: travels(0, 29, 1)
+    .filter((i) => i < 12 || i > 14)
+    .map((i) => ({
+      day: day(i),
+      reversals: Math.round(400 + 90 * wobble(i) + (i > 22 ? 300 : 0)),
+      travel: Math.round(1700 + 350 * wobble(i + 3) + (i > 22 ? 1500 : 0)),
+    })),
+};
+
+export const sampleSplit = {
+  deadBand: 2.4,
+  standardError: 0.21,
+  bins: 12,
+  lines: travels(34, 58, 2).map((at, i) => ({
+    at,
+    up: at - 1.6 + 0.2 * wobble(i),
+    down: at + 0.8 + 0.2 * wobble(i + 7),
+  })),
+};
+
+export const sampleDrift: NonNullable<PresentedAssessment['drift']> = {
+  by: 'month',
+  reference: { from: day(-360), to: day(-300) },
+  series: travels(0, 11, 1).map((i) => {
+    const change = -0.004 * i + (i > 7 ? -0.06 : 0) + 0.008 * wobble(i);
+    return {
+      at: day(-345 + i * 30.4),
+      change,
+      low: change - 0.018,
+      high: change + 0.018,
+      windows: 240 - 9 * i,
+    };
+  }),
+  trend: { change: -0.12, low: -0.15, high: -0.09, p: 0.0004, confirmed: true },
+  steps: [{ at: day(-345 + 7.5 * 30.4), change: -0.062 }],
+};

@@ -5,7 +5,10 @@ import { type Glyph } from '@tailrace/shared/charts/characteristic-glyph';
 
 /** The sentences in which a drawing is told to a reader who cannot see it. */
 
-const percent = (share: number): string => `${figureText(share * 100, share < 0.1 ? 2 : 3)} %`;
+/** A share 0 to 1 as a percentage. */
+export function percent(share: number): string {
+  return `${figureText(share * 100, share < 0.1 ? 2 : 3)} %`;
+}
 
 /** The travel ridge in words. */
 export function ridgeInWords(ridge: Ridge | null, outside: { below: number; above: number }): string {
@@ -38,13 +41,13 @@ export function basisInWords(pressureDrop: 'measured' | 'modelled' | 'none'): st
   }[pressureDrop];
 }
 
-/** The three percentiles of travel, as a line beside a ridge. */
-export function percentilesInWords(range: { p5: number; p50: number; p95: number }): string {
-  const { p5, p50, p95 } = range;
-  return `Time by travel: 5 % of it below ${figureText(p5)}, half below ${figureText(p50)}, 95 % below ${figureText(p95)}`;
-}
-
 type Characteristic = NonNullable<PresentedAssessment['characteristic']>;
+
+/** Is the deviation in shape at a travel beyond the tolerance there? False where it was not judged. */
+export function outsideTolerance(deviation: PresentedAssessment['deviation']): (travel: number) => boolean {
+  const bins = (deviation?.byTravel ?? []).filter((bin) => Math.abs(bin.percent) > bin.tolerance);
+  return (travel) => bins.some((bin) => Math.abs(bin.travel - travel) < 0.5);
+}
 
 /** The characteristic chart in one sentence. */
 export function characteristicInWords(
@@ -63,4 +66,53 @@ export function characteristicInWords(
     ? `, largest deviation ${figureText(deviation.worst.percent)} % at ${figureText(deviation.worst.travel)} % travel`
     : '';
   return `${found}${specified.length > 0 ? against : ''}${worst}.`;
+}
+
+const counted = (count: number, one: string) => `${count} ${one}${count === 1 ? '' : 's'}`;
+
+/** The deviation chart in one sentence. */
+export function deviationInWords(bins: { percent: number; tolerance: number; travel: number }[]): string {
+  const beyond = bins.filter((bin) => Math.abs(bin.percent) > bin.tolerance).length;
+  return `Deviation in shape from the data sheet in ${counted(bins.length, 'travel bin')}: ${beyond} beyond the tolerance.`;
+}
+
+interface Figure {
+  value: number;
+  low: number;
+  high: number;
+}
+
+/** A gain ratio as it may honestly be said: "over 4" where even its lower bound is above that. */
+export function gainRatioInWords(ratio: Figure): string {
+  if (ratio.low > 4) return `over ${figureText(Math.floor(ratio.low))} to 1`;
+  return `${ratio.value.toFixed(1)} to 1 (${ratio.low.toFixed(1)} to ${ratio.high.toFixed(1)})`;
+}
+
+/** Dead band with its standard error. */
+export function deadBandInWords(split: { deadBand: number; standardError: number; bins: number }): string {
+  const { deadBand, standardError, bins } = split;
+  return `Dead band ${figureText(deadBand, 2)} ± ${figureText(standardError, 1)} % travel, from ${counted(bins, 'travel bin')}`;
+}
+
+/** A change with its sign: +4 %, −12 %. */
+export function signedPercent(percent: number): string {
+  const text = figureText(percent, Math.abs(percent) < 10 ? 2 : 3);
+  return `${percent > 0 && text !== '0' ? '+' : ''}${text} %`;
+}
+
+/** A change of capacity with its interval. */
+export function changeInWords(change: { percent: number; lowPercent: number; highPercent: number }): string {
+  const { percent: value, lowPercent, highPercent } = change;
+  return `${signedPercent(value)} (${signedPercent(lowPercent)} to ${signedPercent(highPercent)})`;
+}
+
+/** What the trend test said, or why it said nothing. Changes are ln of capacity. */
+export function trendInWords(trend: NonNullable<PresentedAssessment['drift']>['trend']): string {
+  if ('judged' in trend) return `Trend: cannot judge. ${trend.reason}`;
+  const change = changeInWords({
+    percent: 100 * Math.expm1(trend.change),
+    lowPercent: 100 * Math.expm1(trend.low),
+    highPercent: 100 * Math.expm1(trend.high),
+  });
+  return `Trend over the record: ${change}, ${trend.confirmed ? 'confirmed' : 'not confirmed'}.`;
 }

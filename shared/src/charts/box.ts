@@ -19,5 +19,15 @@ export interface Place {
   readonly y: number;
 }
 
+export interface Size {
+  readonly width: number;
+  readonly height: number;
+}
+
+/** The usual place of a plot: room at the left for numbers, above for the axis title, below for both. */
+export function plotBox({ width, height }: Size, foot = 36): Box {
+  return { left: 46, right: width - 14, top: 26, bottom: height - foot };
+}
+
 /** Whole hundredths of a px are finer than any screen or printer and keep the paths short. */
 export const pathDigits = 2;

@@ -1,6 +1,7 @@
 import { area, line } from 'd3-shape';
-import { pathDigits, type Box, type Place, type Tick } from './box.js';
+import { pathDigits, plotBox, type Box, type Place, type Size, type Tick } from './box.js';
 import { curveAt, curveBetween } from './curve-between.js';
+import { spreadApart } from './spread-apart.js';
 import { travelRidge, type Ridge, type RidgeGeometry } from './travel-ridge.js';
 import { travelScale, travelTicks } from './travel-scale.js';
 import { linearValues, logValues, type ValueScale } from './value-scale.js';
@@ -46,7 +47,10 @@ export interface CharacteristicGeometry {
   readonly fittedBand: string;
   readonly specified: string;
   readonly tolerance: string;
-  readonly ridge: RidgeGeometry;
+  /** null where no operating range was found */
+  readonly ridge: RidgeGeometry | null;
+  /** px of the names of the percentiles, moved apart where they would touch */
+  readonly percentileNames: readonly { readonly name: string; readonly travel: number; readonly x: number }[];
   readonly asFoundLabel: CurveLabel | null;
   readonly specifiedLabel: CurveLabel | null;
   /** px of the coefficient axis for a value, for marks the caller adds */
@@ -69,10 +73,10 @@ const beyond = 5;
 export function characteristicChart(
   characteristic: DrawnCharacteristic,
   ridge: Ridge | null,
-  size: { readonly width: number; readonly height: number },
+  size: Size,
   axis: 'linear' | 'log',
 ): CharacteristicGeometry {
-  const plot = { left: 46, right: size.width - 14, top: 26, bottom: size.height - 126 };
+  const plot = plotBox(size, ridge ? 140 : 36);
   const strip = { ...plot, top: plot.bottom + 28, bottom: size.height - 36 };
   const x = travelScale(plot.left, plot.right);
   const { span } = characteristic;
@@ -87,13 +91,21 @@ export function characteristicChart(
   const above = curveBetween(fit, span.to, span.to + beyond);
   const specified = curveBetween(characteristic.specified.filter(drawable), 0, 100);
   const y = (axis === 'log' ? logValues : linearValues)(
-    [...points, ...fitted, ...specified].flatMap((figure) =>
+    [...points, ...below, ...fitted, ...above, ...specified].flatMap((figure) =>
       'high' in figure ? [figure.value, figure.low, figure.high] : [figure.value],
     ),
     plot.bottom,
     plot.top,
   );
 
+  const drawnRidge = ridge && travelRidge(ridge, strip);
+  const names = drawnRidge?.percentiles ?? [];
+  const apart = spreadApart(
+    names.map((percentile) => percentile.x),
+    54,
+    plot.left + 20,
+    plot.right - 20,
+  );
   const mostSamples = Math.max(1, ...points.map((point) => point.count));
   const curve = line<Bounds>(
     (at) => x(at.travel),
@@ -121,7 +133,8 @@ export function characteristicChart(
     fittedBand: drawn(band(fitted), fitted),
     specified: drawn(curve(specified), specified),
     tolerance: drawn(band(specified), specified),
-    ridge: travelRidge(ridge, strip),
+    ridge: drawnRidge,
+    percentileNames: names.map(({ name, travel }, i) => ({ name, travel, x: apart[i] ?? 0 })),
     ...curveLabels(fitted, specified, x, y, plot),
     place: (travel, value) => ({ x: x(travel), y: y.place(value) }),
   };
@@ -138,23 +151,25 @@ function curveLabels(
   const end = fitted.at(-1);
   const beside = end && curveAt(specified, end.travel);
   const higher = !end || !beside || end.value >= beside.value;
-  const asFoundLabel = end ? label(x(end.travel), y.place(end.value), higher, plot) : null;
   const anchor = curveAt(specified, 82) ?? specified.at(-1);
-  const specifiedLabel = anchor
-    ? label(x(anchor.travel), y.place(anchor.value), end ? !higher : true, plot)
-    : null;
-  return { asFoundLabel, specifiedLabel };
+  return {
+    asFoundLabel: end ? label(x(end.travel), y.place(end.value), higher, plot, 60) : null,
+    specifiedLabel: anchor
+      ? label(x(anchor.travel), y.place(higher ? anchor.low : anchor.high), !higher || !end, plot, 116)
+      : null,
+  };
 }
 
-function label(x: number, y: number, above: boolean, plot: Box): CurveLabel {
+/** A name of so many px beside a place: left of and above it, or right of and below it. */
+function label(x: number, y: number, above: boolean, plot: Box, width: number): CurveLabel {
   if (above) {
-    const fits = x - plot.left > 110;
+    const fits = x - plot.left > width;
     return { x: fits ? x - 8 : x + 8, y: Math.max(plot.top + 12, y - 8), anchor: fits ? 'end' : 'start' };
   }
-  const fits = plot.right - x > 110;
+  const fits = plot.right - x > width;
   return {
-    x: fits ? x + 10 : plot.right - 2,
-    y: Math.min(plot.bottom - 8, y + 16),
+    x: fits ? x + 8 : plot.right - 2,
+    y: Math.min(plot.bottom - 8, y + 18),
     anchor: fits ? 'start' : 'end',
   };
 }

@@ -19,7 +19,10 @@ export interface Ridge {
 export interface RidgeGeometry {
   readonly left: number;
   readonly right: number;
+  readonly top: number;
   readonly baseline: number;
+  /** the ridge's upper edge: both ends of travel, and between them the middle of each part of travel */
+  readonly edge: readonly Place[];
   /** area of the ridge within the band */
   readonly within: string;
   /** area of the ridge beyond the band, and strokes to tell it without colour */
@@ -39,7 +42,7 @@ export interface RidgeGeometry {
 }
 
 /** Share of time per 1 % of travel that fills the height; one value for all rows, or rows would not compare. */
-export const fullShare = 0.16;
+export const fullShare = 0.12;
 
 /** px under the baseline for percentile ticks and the bracket */
 export const footHeight = 13;
@@ -50,8 +53,8 @@ export const footHeight = 13;
  * The axis is 0 to 100 % and the height is fixed, so that rows of a list compare. Height goes with the square
  * root of the share: the evidence is often in 5 % of the time spread over the last tenth of travel (0.5 % of
  * time per 1 % of travel), which on a linear height that still shows a busy valve whole would be one pixel of
- * a row; the root makes it five, and keeps a valve spread over half its travel at about a third of the
- * height. A peak above 16 % of the time in 1 % of travel is cut at the top and marked as cut.
+ * a row; the root makes it six, and keeps a valve spread over half its travel at two fifths of the
+ * height. A peak above 12 % of the time in 1 % of travel is cut at the top and marked as cut.
  *
  * @param ridge null where the valve was never assessed
  * @param box px; the lowest 13 px hold ticks and bracket
@@ -63,9 +66,9 @@ export function travelRidge(ridge: Ridge | null, box: Box): RidgeGeometry {
   const height = scaleSqrt([0, fullShare], [baseline, box.top]).clamp(true);
   const toPlaces = (profile: ShareProfile): Place[] =>
     profile.map((place) => ({ x: x(place.x), y: height(place.y) }));
-  const frame = { left: box.left, right: box.right, baseline };
+  const frame = { left: box.left, right: box.right, top: box.top, baseline };
   if (!ridge) {
-    const nothing = { within: '', beyond: '', hatch: '', bracket: '', percentiles: [], cuts: [] };
+    const nothing = { edge: [], within: '', beyond: '', hatch: '', bracket: '', percentiles: [], cuts: [] };
     return { ...frame, ...nothing, outside: { below: 0, above: 0 } };
   }
 
@@ -75,6 +78,7 @@ export function travelRidge(ridge: Ridge | null, box: Box): RidgeGeometry {
   const above = toPlaces(profileBetween(profile, band.high, 100));
   return {
     ...frame,
+    edge: toPlaces(profile),
     within: areaPath(toPlaces(profileBetween(profile, band.low, band.high)), baseline),
     beyond: areaPath(below, baseline) + areaPath(above, baseline),
     hatch: hatchUnder(below, baseline, 4) + hatchUnder(above, baseline, 4),

@@ -4,11 +4,21 @@ import { CharacteristicGlyph } from '../../charts/CharacteristicGlyph';
 import {
   sampleCharacteristic,
   sampleDeviation,
+  sampleDrift,
+  sampleGain,
   sampleGlyphs,
   sampleInstalled,
+  sampleMovement,
   sampleRange,
   sampleRidges,
+  sampleSplit,
 } from '../../charts/chart-samples';
+import { DeviationChart } from '../../charts/DeviationChart';
+import { DriftChart } from '../../charts/DriftChart';
+import { GainChart } from '../../charts/GainChart';
+import { MovementBars } from '../../charts/MovementBars';
+import { SplitChart } from '../../charts/SplitChart';
+import { TravelChart } from '../../charts/TravelChart';
 import { TravelRidge, TravelRidgeAxis } from '../../charts/TravelRidge';
 
 /** Every drawing of Tailrace with invented data, to look at while working on it. */
@@ -44,6 +54,18 @@ export function Component() {
         characteristic={sampleCharacteristic}
         range={sampleRange}
         deviation={sampleDeviation}
+      />
+      <TravelChart tag="FV-2101" ridge={{ ...sampleRange, shares: sampleRange.ridge }} />
+      <DeviationChart tag="FV-2101" bins={sampleDeviation.byTravel} />
+      <GainChart tag="FV-2101" gain={sampleGain} />
+      <DriftChart tag="FV-2101" drift={sampleDrift} zone="Europe/Zurich" />
+      <MovementBars tag="FV-2101" movement={sampleMovement} zone="Europe/Zurich" />
+      <SplitChart
+        tag="FV-2101"
+        title="Demand to position"
+        reference="Demand, %"
+        response="Position, %"
+        split={sampleSplit}
       />
       <CharacteristicChart tag="LV-3307" characteristic={sampleInstalled} range={null} deviation={null} />
     </Box>
