@@ -1,11 +1,13 @@
 import { characteristicChart } from '@tailrace/shared/charts/characteristic-chart';
+import { curveAt } from '@tailrace/shared/charts/curve-between';
 import { figureText } from '@tailrace/shared/charts/figure-text';
 import { type PresentedAssessment } from '@tailrace/shared/contracts/assessments';
 import { useState } from 'react';
 import { AcrossAxis, UpAxis } from './Axes';
 import { CharacteristicMarks, CurveName } from './CharacteristicMarks';
-import { ChartFrame, Tool, type Drawing } from './ChartFrame';
-import { basisInWords, characteristicInWords, outsideTolerance } from './chart-words';
+import { ChartFrame, type Drawing } from './ChartFrame';
+import { ChartTool } from './ChartTool';
+import { basisInWords, characteristicInWords, outsideTolerance, rowsOf } from './chart-words';
 import { RidgeMarks } from './RidgeMarks';
 
 interface CharacteristicChartProps {
@@ -19,7 +21,7 @@ interface CharacteristicChartProps {
 /** What was found of the characteristic, over what was specified, above the travel it was found from. */
 export function CharacteristicChart({ tag, characteristic, range, deviation }: CharacteristicChartProps) {
   const [axis, setAxis] = useState<'linear' | 'log'>('linear');
-  const { unit, points, specified, pressureDrop } = characteristic;
+  const { unit, points, curve, specified, pressureDrop } = characteristic;
   const quantity = `${pressureDrop === 'none' ? 'Flow' : 'Flow coefficient'}, ${unit}`;
   const basis = basisInWords(pressureDrop);
   const ridge = range && { ...range, shares: range.ridge };
@@ -77,13 +79,19 @@ export function CharacteristicChart({ tag, characteristic, range, deviation }: C
       fileName={`${tag} characteristic`}
       height={(width) => (width < 560 ? 420 : 500)}
       tools={
-        <Tool pressed={axis === 'log'} onClick={() => setAxis(axis === 'log' ? 'linear' : 'log')}>
+        <ChartTool pressed={axis === 'log'} onClick={() => setAxis(axis === 'log' ? 'linear' : 'log')}>
           Log axis
-        </Tool>
+        </ChartTool>
       }
       table={{
-        columns: ['Travel, %', `As found, ${unit}`, 'Steady windows'],
-        rows: points.map((point) => [figureText(point.travel), figureText(point.value), String(point.count)]),
+        columns: ['Travel, %', `As found, ${unit}`, 'Steady windows', `Fit, ${unit}`, `Specified, ${unit}`],
+        rows: rowsOf(
+          points.map((point) => point.travel),
+          points.map((point) => point.value),
+          points.map((point) => String(point.count)),
+          points.map((point) => curveAt(curve, point.travel)?.value ?? NaN),
+          points.map((point) => curveAt(specified, point.travel)?.value ?? NaN),
+        ),
       }}
       draw={draw}
     />

@@ -1,6 +1,7 @@
-import { Box, Button, Typography } from '@mui/material';
+import { Box, Typography } from '@mui/material';
 import { useId, useRef, useState, type ReactNode } from 'react';
 import { ChartTable, type ChartTableContent } from './ChartTable';
+import { ChartTool } from './ChartTool';
 import { inks, lettering } from './inks';
 import { saveDrawing } from './save-drawing';
 import { useChartCursor, type CursorSeries } from './useChartCursor';
@@ -53,11 +54,11 @@ export function ChartFrame(props: ChartFrameProps) {
         </Typography>
         <Box sx={{ display: 'flex', '@media print': { display: 'none' } }}>
           {tools}
-          <Tool pressed={asTable} onClick={() => setAsTable(!asTable)}>
+          <ChartTool pressed={asTable} onClick={() => setAsTable(!asTable)}>
             Table
-          </Tool>
-          {!asTable && <Tool onClick={() => save('svg')}>SVG</Tool>}
-          {!asTable && <Tool onClick={() => save('png')}>PNG</Tool>}
+          </ChartTool>
+          {!asTable && <ChartTool onClick={() => save('svg')}>SVG</ChartTool>}
+          {!asTable && <ChartTool onClick={() => save('png')}>PNG</ChartTool>}
         </Box>
       </Box>
       <div ref={measured}>
@@ -94,30 +95,14 @@ export function ChartFrame(props: ChartFrameProps) {
           </Box>
         )}
       </div>
-      <Typography variant="body2" aria-live="polite" sx={{ minHeight: '1.6em', color: inks.ink }}>
+      <Typography
+        variant="body2"
+        role="status"
+        aria-live="polite"
+        sx={{ minHeight: '1.6em', color: inks.ink }}
+      >
         {cursor.text}
       </Typography>
     </Box>
-  );
-}
-
-interface ToolProps {
-  pressed?: boolean;
-  onClick: () => void;
-  children: string;
-}
-
-/** One small word to press above a chart. */
-export function Tool({ pressed, onClick, children }: ToolProps) {
-  return (
-    <Button
-      size="small"
-      variant="text"
-      aria-pressed={pressed}
-      onClick={onClick}
-      sx={{ minWidth: 0, px: 1, py: 0, textDecoration: pressed ? 'underline' : 'none' }}
-    >
-      {children}
-    </Button>
   );
 }

@@ -1,4 +1,5 @@
 import { Table, TableBody, TableCell, TableContainer, TableHead, TableRow } from '@mui/material';
+import { inks } from './inks';
 
 export interface ChartTableContent {
   /** heads with their unit, the first naming the rows */
@@ -15,11 +16,11 @@ export function ChartTable({ title, content }: { title: string; content: ChartTa
       aria-label={`${title}, table`}
       sx={{ maxHeight: 420, '@media print': { maxHeight: 'none' } }}
     >
-      <Table size="small" stickyHeader aria-label={title}>
+      <Table size="small" stickyHeader aria-label={title} sx={{ width: 'auto' }}>
         <TableHead>
           <TableRow>
             {content.columns.map((column) => (
-              <TableCell key={column} align="right">
+              <TableCell key={column} align="right" sx={{ bgcolor: inks.paper, fontWeight: 600 }}>
                 {column}
               </TableCell>
             ))}

@@ -4,7 +4,7 @@ import { figureText } from '@tailrace/shared/charts/figure-text';
 import { type PresentedAssessment } from '@tailrace/shared/contracts/assessments';
 import { AcrossAxis, UpAxis } from './Axes';
 import { ChartFrame, type Drawing } from './ChartFrame';
-import { deviationInWords, signedPercent } from './chart-words';
+import { deviationInWords, rowsOf, signedPercent } from './chart-words';
 import { inks } from './inks';
 
 interface DeviationChartProps {
@@ -53,7 +53,11 @@ export function DeviationChart({ tag, bins }: DeviationChartProps) {
       height={() => 240}
       table={{
         columns: ['Travel, %', 'Deviation, %', 'Tolerance, ± %'],
-        rows: bins.map((bin) => [figureText(bin.travel), figureText(bin.percent), figureText(bin.tolerance)]),
+        rows: rowsOf(
+          bins.map((bin) => bin.travel),
+          bins.map((bin) => bin.percent),
+          bins.map((bin) => bin.tolerance),
+        ),
       }}
       draw={draw}
     />

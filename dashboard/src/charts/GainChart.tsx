@@ -4,7 +4,7 @@ import { gainChart, wantedGain } from '@tailrace/shared/charts/gain-chart';
 import { type PresentedAssessment } from '@tailrace/shared/contracts/assessments';
 import { AcrossAxis, UpAxis } from './Axes';
 import { ChartFrame, type Drawing } from './ChartFrame';
-import { gainRatioInWords } from './chart-words';
+import { gainRatioInWords, rowsOf } from './chart-words';
 import { inks } from './inks';
 
 interface GainChartProps {
@@ -65,7 +65,10 @@ export function GainChart({ tag, gain }: GainChartProps) {
       height={() => 240}
       table={{
         columns: ['Travel, %', `Gain, ${unit}`],
-        rows: gain.points.map((point) => [figureText(point.travel), figureText(point.gain, 2)]),
+        rows: rowsOf(
+          gain.points.map((point) => point.travel),
+          gain.points.map((point) => point.gain),
+        ),
       }}
       draw={draw}
     />

@@ -5,6 +5,7 @@ import { dayText } from '@tailrace/shared/charts/time-scale';
 import { type PresentedAssessment } from '@tailrace/shared/contracts/assessments';
 import { AcrossAxis, UpAxis } from './Axes';
 import { ChartFrame, type Drawing } from './ChartFrame';
+import { rowsOf } from './chart-words';
 import { inks } from './inks';
 
 interface MovementBarsProps {
@@ -73,7 +74,11 @@ export function MovementBars({ tag, movement, zone }: MovementBarsProps) {
       height={() => 300}
       table={{
         columns: ['Day', 'Travel, %', 'Reversals'],
-        rows: days.map((day) => [dayText(day.day, zone), figureText(day.travel), figureText(day.reversals)]),
+        rows: rowsOf(
+          days.map((day) => dayText(day.day, zone)),
+          days.map((day) => day.travel),
+          days.map((day) => day.reversals),
+        ),
       }}
       draw={draw}
     />

@@ -9,6 +9,7 @@ export function RidgeMarks({ geometry }: { geometry: RidgeGeometry }) {
       <path d={geometry.within} fill={inks.quiet} />
       <path d={geometry.beyond} fill={inks.rust} />
       <path d={geometry.hatch} stroke={inks.paper} strokeWidth={1} />
+      <path d={geometry.beyond} stroke={inks.rust} strokeWidth={1} />
       {geometry.cuts.map((x) => (
         <path key={x} d={`M${x - 9},${top + 8}l18,-5`} stroke={inks.paper} strokeWidth={2} />
       ))}

@@ -3,7 +3,7 @@ import { figureText } from '@tailrace/shared/charts/figure-text';
 import { splitChart, type SplitPlace } from '@tailrace/shared/charts/split-chart';
 import { AcrossAxis, UpAxis } from './Axes';
 import { ChartFrame, type Drawing } from './ChartFrame';
-import { deadBandInWords } from './chart-words';
+import { deadBandInWords, rowsOf } from './chart-words';
 import { inks } from './inks';
 
 interface SplitChartProps {
@@ -17,12 +17,16 @@ interface SplitChartProps {
   split: { deadBand: number; standardError: number; bins: number; lines: readonly SplitPlace[] };
 }
 
+type Pair = ReturnType<typeof splitChart>['places'][number];
+const upper = ({ up, down }: Pair) => (down.y < up.y ? down : up);
+const lower = ({ up, down }: Pair) => (down.y < up.y ? up : down);
+
 /** What the response was while rising and while falling: the gap between the lines is the dead band. */
 export function SplitChart({ tag, title, reference, response, split }: SplitChartProps) {
   const words = deadBandInWords(split);
   const draw = (size: Size): Drawing => {
     const { plot, places, ...geometry } = splitChart(split.lines, size);
-    const last = places.at(-1);
+    const middle = places[Math.floor(places.length / 2)];
     const read = (direction: 'up' | 'down') =>
       places.map((place) => ({
         ...place[direction],
@@ -41,13 +45,13 @@ export function SplitChart({ tag, title, reference, response, split }: SplitChar
               <path d={`M${down.x - 4},${down.y - 3}h8l-4,7z`} fill={inks.paper} stroke={inks.ink} />
             </g>
           ))}
-          {last && (
-            <g fill={inks.ink} textAnchor="end">
-              <text x={last.x - 10} y={Math.min(last.up.y, last.down.y) - 6}>
-                {last.down.y < last.up.y ? 'falling' : 'rising'}
+          {middle && (
+            <g fill={inks.ink}>
+              <text x={middle.x - 8} y={upper(middle).y - 8} textAnchor="end">
+                {middle.down.y < middle.up.y ? 'falling' : 'rising'}
               </text>
-              <text x={last.x} y={Math.max(last.up.y, last.down.y) + 20}>
-                {last.down.y < last.up.y ? 'rising' : 'falling'}
+              <text x={middle.x + 8} y={lower(middle).y + 20}>
+                {middle.down.y < middle.up.y ? 'rising' : 'falling'}
               </text>
             </g>
           )}
@@ -69,7 +73,11 @@ export function SplitChart({ tag, title, reference, response, split }: SplitChar
       height={() => 260}
       table={{
         columns: [reference, `${response}, rising`, `${response}, falling`],
-        rows: split.lines.map((line) => [figureText(line.at), figureText(line.up), figureText(line.down)]),
+        rows: rowsOf(
+          split.lines.map((line) => line.at),
+          split.lines.map((line) => line.up),
+          split.lines.map((line) => line.down),
+        ),
       }}
       draw={draw}
     />

@@ -5,7 +5,7 @@ import { travelRidge, type Ridge } from '@tailrace/shared/charts/travel-ridge';
 import { travelTicks } from '@tailrace/shared/charts/travel-scale';
 import { AcrossAxis } from './Axes';
 import { ChartFrame, type Drawing } from './ChartFrame';
-import { percent, ridgeInWords } from './chart-words';
+import { percent, ridgeInWords, rowsOf } from './chart-words';
 import { inks } from './inks';
 import { RidgeMarks } from './RidgeMarks';
 
@@ -72,10 +72,13 @@ export function TravelChart({ tag, ridge }: TravelChartProps) {
 
 /** The shares of time summed by tenths of travel: a hundred rows would hide what ten show. */
 function byTenths(shares: readonly number[]): string[][] {
-  return Array.from({ length: 10 }, (_, tenth) => {
-    const [low, high] = [tenth * 10, tenth * 10 + 10];
-    const { below, above } = sharesOutside(shares, { low, high });
-    const total = shares.reduce((sum, share) => sum + share, 0);
-    return [`${low} to ${high}`, figureText((total - below - above) * 100, 2)];
-  });
+  const total = shares.reduce((sum, share) => sum + share, 0);
+  const lows = Array.from({ length: 10 }, (_, tenth) => tenth * 10);
+  return rowsOf(
+    lows.map((low) => `${low} to ${low + 10}`),
+    lows.map((low) => {
+      const { below, above } = sharesOutside(shares, { low, high: low + 10 });
+      return ((total - below - above) * 100).toFixed(1);
+    }),
+  );
 }

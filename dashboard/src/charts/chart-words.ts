@@ -1,5 +1,5 @@
 import { type PresentedAssessment } from '@tailrace/shared/contracts/assessments';
-import { figureText } from '@tailrace/shared/charts/figure-text';
+import { figureColumn, figureText } from '@tailrace/shared/charts/figure-text';
 import { type Ridge } from '@tailrace/shared/charts/travel-ridge';
 import { type Glyph } from '@tailrace/shared/charts/characteristic-glyph';
 
@@ -115,4 +115,12 @@ export function trendInWords(trend: NonNullable<PresentedAssessment['drift']>['t
     highPercent: 100 * Math.expm1(trend.high),
   });
   return `Trend over the record: ${change}, ${trend.confirmed ? 'confirmed' : 'not confirmed'}.`;
+}
+
+/** Table rows from columns of numbers, each column with its own even decimals, and of words. */
+export function rowsOf(...columns: (number[] | string[])[]): string[][] {
+  const texts = columns.map((column) =>
+    figureColumn(column.map(Number)).map((text, i) => (typeof column[i] === 'string' ? column[i] : text)),
+  );
+  return (texts[0] ?? []).map((_, row) => texts.map((column) => column[row] ?? '–'));
 }

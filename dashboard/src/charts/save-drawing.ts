@@ -9,7 +9,9 @@ import fontAddress from '@fontsource/roboto-condensed/files/roboto-condensed-lat
 export function drawingText(svg: SVGSVGElement, font: string | null): string {
   const theme = getComputedStyle(svg);
   const copy = svg.cloneNode(true) as SVGSVGElement;
-  copy.setAttribute('xmlns', 'http://www.w3.org/2000/svg');
+  const [, , width = '0', height = '0'] = copy.getAttribute('viewBox')?.split(' ') ?? [];
+  copy.setAttribute('width', width);
+  copy.setAttribute('height', height);
   copy.querySelectorAll('[data-cursor]').forEach((mark) => mark.remove());
   const paper = copy.ownerDocument.createElementNS('http://www.w3.org/2000/svg', 'rect');
   const style = copy.ownerDocument.createElementNS('http://www.w3.org/2000/svg', 'style');
