@@ -1,4 +1,5 @@
 import { type DataSheet } from '../data-sheet.js';
+import { fittingLosses } from './fittings.js';
 import { type FlowCoefficient, type FlowConditions, noCoefficient } from './flow-conditions.js';
 import { gasCoefficient } from './gas.js';
 import { liquidCoefficient } from './liquid.js';
@@ -29,7 +30,9 @@ export function flowCoefficient(
     !(downstreamPressure >= 0)
   )
     return noCoefficient;
+  // the sheet knows one pipe size: the reducers on both sides are taken as equal
+  const setting = { losses: fittingLosses(sheet.valveSize, sheet.pipeSize, sheet.pipeSize), chokedFrom };
   return fluid.phase === 'liquid'
-    ? liquidCoefficient(conditions, sheet, fluid, chokedFrom)
-    : gasCoefficient(conditions, sheet, fluid, chokedFrom);
+    ? liquidCoefficient(conditions, sheet, fluid, setting)
+    : gasCoefficient(conditions, sheet, fluid, setting);
 }

@@ -1,3 +1,5 @@
+import { type FittingLosses } from './fittings.js';
+
 /** What was measured in one steady window, in the units of methods.md §0. */
 export interface FlowConditions {
   /** in the unit of the sheet's flow basis */
@@ -10,6 +12,13 @@ export interface FlowConditions {
   readonly temperature: number | null;
   /** kg/m³ at the inlet; null or NaN where not recorded */
   readonly density: number | null;
+}
+
+/** What stays the same from window to window beside the sheet. */
+export interface FlowSetting {
+  readonly losses: FittingLosses;
+  /** share of the choked drop from which a window counts as choked */
+  readonly chokedFrom: number;
 }
 
 /** The flow coefficient one window shows. */

@@ -1,7 +1,13 @@
 import { type DataSheet, type Fluid } from '../data-sheet.js';
 import { gasConstant, molarVolume, N22, N6, N8, N9 } from './constants.js';
-import { dropRatioWithFittings, fittingLosses, pipingFactor } from './fittings.js';
-import { type FlowCoefficient, type FlowConditions, known, noCoefficient } from './flow-conditions.js';
+import { dropRatioWithFittings, pipingFactor } from './fittings.js';
+import {
+  type FlowCoefficient,
+  type FlowConditions,
+  type FlowSetting,
+  known,
+  noCoefficient,
+} from './flow-conditions.js';
 import { nonTurbulentCoefficient, reynoldsFactor, turbulentFrom, valveReynolds } from './reynolds.js';
 import { dropRatioFactor, recoveryFactor, styleModifier } from './style-factors.js';
 
@@ -15,14 +21,14 @@ import { dropRatioFactor, recoveryFactor, styleModifier } from './style-factors.
  * density stands in; without molar mass only mass and volume flow with a known density can be used. What is then
  * still missing → NaN.
  *
- * @param chokedFrom share of the choked drop from which the window counts as choked
+ * @param setting reducers at the valve, and the share of the choked drop from which the window counts as choked
  * Source: IEC 60534-2-1:2011; methods.md §2.2, §2.3, §2.4
  */
 export function gasCoefficient(
   conditions: FlowConditions,
   sheet: DataSheet,
   fluid: Fluid,
-  chokedFrom: number,
+  { losses, chokedFrom }: FlowSetting,
 ): FlowCoefficient {
   const P1 = conditions.upstreamPressure;
   const P2 = conditions.downstreamPressure;
@@ -36,7 +42,6 @@ export function gasCoefficient(
   let xChoked = gamma * xT;
   let coefficient = expanded(demand, x, xChoked);
   const d = sheet.valveSize;
-  const losses = fittingLosses(d, sheet.pipeSize, sheet.pipeSize);
   if (losses.inlet > 0 && d !== null) {
     const bare = coefficient;
     let settled = false;

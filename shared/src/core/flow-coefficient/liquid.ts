@@ -1,7 +1,13 @@
 import { type DataSheet, type Fluid } from '../data-sheet.js';
 import { N1, N2, waterDensity } from './constants.js';
-import { fittingLosses, pipingFactor, recoveryWithFittings } from './fittings.js';
-import { type FlowCoefficient, type FlowConditions, known, noCoefficient } from './flow-conditions.js';
+import { pipingFactor, recoveryWithFittings } from './fittings.js';
+import {
+  type FlowCoefficient,
+  type FlowConditions,
+  type FlowSetting,
+  known,
+  noCoefficient,
+} from './flow-conditions.js';
 import { nonTurbulentCoefficient, reynoldsFactor, turbulentFrom, valveReynolds } from './reynolds.js';
 import { recoveryFactor, styleModifier } from './style-factors.js';
 
@@ -28,14 +34,14 @@ export function criticalRatioFactor(vapourPressure: number, criticalPressure: nu
  * critical pressure → FF 0.96; FL and Fd → typical of the style; viscosity → turbulent. A liquid given in normal
  * volume → NaN.
  *
- * @param chokedFrom share of the choked drop from which the window counts as choked
+ * @param setting reducers at the valve, and the share of the choked drop from which the window counts as choked
  * Source: IEC 60534-2-1:2011; methods.md §2.1, §2.3, §2.4
  */
 export function liquidCoefficient(
   conditions: FlowConditions,
   sheet: DataSheet,
   fluid: Fluid,
-  chokedFrom: number,
+  { losses, chokedFrom }: FlowSetting,
 ): FlowCoefficient {
   const density = known(conditions.density, fluid.density);
   const drop = conditions.upstreamPressure - conditions.downstreamPressure;
@@ -51,9 +57,9 @@ export function liquidCoefficient(
   const demand = (flow * Math.sqrt(density / waterDensity)) / N1;
   const bare = demand / Math.sqrt(drop);
 
-  let coefficient = Math.max(bare, demand / (FL * Math.sqrt(room)));
+  const plain = Math.max(bare, demand / (FL * Math.sqrt(room)));
+  let coefficient = plain;
   let chokedDrop = FL * FL * room;
-  const losses = fittingLosses(d, sheet.pipeSize, sheet.pipeSize);
   if (losses.inlet > 0 && d !== null) {
     const perSquare = 1 / (N2 * d ** 4);
     const unchoked = bare / Math.sqrt(1 - losses.sum * perSquare * bare * bare);
@@ -74,11 +80,11 @@ export function liquidCoefficient(
   const shape = { FL, Fd: styleModifier(sheet), D: sheet.pipeSize ?? d };
   if (valveReynolds(flow, viscosity, coefficient, shape) >= turbulentFrom)
     return { coefficient, choked, turbulent: true, chokedDrop };
-  // the standard's viscous equation knows neither reducers nor choking
+  // the standard's viscous equation knows no reducers
   const viscous =
     d === null
       ? coefficient
-      : nonTurbulentCoefficient(bare, (C) =>
+      : nonTurbulentCoefficient(plain, (C) =>
           reynoldsFactor(valveReynolds(flow, viscosity, C, shape), C, d, FL),
         );
   return { coefficient: viscous, choked, turbulent: false, chokedDrop };
