@@ -24,6 +24,13 @@ describe('the travel ridge', () => {
     expect(ridge.outside).toEqual({ below: 0, above: 0 });
   });
 
+  test('does not colour a trace of time beyond the band that would be a hair high', () => {
+    const shares = Array.from({ length: 100 }, (_, i) => (i === 50 ? 0.9999 : 0.000_001));
+    const ridge = travelRidge(aRidge({ shares }), box);
+    expect(ridge.beyond).toBe('');
+    expect(ridge.outside.below).toBeCloseTo(0.000_01, 9);
+  });
+
   test('draws the part above the band apart, hatched, starting at the band', () => {
     const ridge = travelRidge(aRidge({ band: { low: 10, high: 50 } }), box);
     const across = numbers(ridge.beyond).filter((_, i) => i % 2 === 0);

@@ -97,8 +97,9 @@ function bandWithin(band: { readonly low: number; readonly high: number }): { lo
   return { low: Math.max(0, band.low), high: Math.min(100, band.high) };
 }
 
+/** Under half a px there is nothing to see, and a hair of colour would make a healthy valve look ill. */
 function areaPath(places: readonly Place[], baseline: number): string {
-  if (places.every((place) => baseline - place.y < 0.05)) return '';
+  if (places.every((place) => baseline - place.y < 0.5)) return '';
   return (
     area<Place>()
       .x((place) => place.x)
