@@ -31,19 +31,32 @@ export function CharacteristicMarks({ geometry, outside }: CharacteristicMarksPr
       ))}
       <path d={geometry.specified} stroke={inks.quiet} strokeWidth={1.25} />
       <path d={geometry.fittedBand} fill={inks.ink} fillOpacity={0.18} />
-      {geometry.points.map((point) => (
-        <circle
-          key={point.travel}
-          cx={point.x}
-          cy={point.y}
-          r={point.radius}
-          fill={outside(point.travel) ? inks.rust : inks.paper}
-          stroke={outside(point.travel) ? inks.rust : inks.ink}
-          strokeWidth={1}
-        />
-      ))}
+      {geometry.points
+        .filter((point) => !outside(point.travel))
+        .map((point) => (
+          <circle
+            key={point.travel}
+            cx={point.x}
+            cy={point.y}
+            r={point.radius}
+            fill={inks.paper}
+            stroke={inks.ink}
+          />
+        ))}
       <path d={geometry.beyondFitted} stroke={inks.ink} strokeWidth={2} strokeDasharray="2 4" />
       <path d={geometry.fitted} stroke={inks.ink} strokeWidth={2.75} strokeLinecap="round" />
+      {geometry.points
+        .filter((point) => outside(point.travel))
+        .map((point) => (
+          <circle
+            key={point.travel}
+            cx={point.x}
+            cy={point.y}
+            r={point.radius + 0.5}
+            fill={inks.rust}
+            stroke={inks.paper}
+          />
+        ))}
     </g>
   );
 }

@@ -49,10 +49,10 @@ export function ChartFrame(props: ChartFrameProps) {
         <Typography id={titleId} component="figcaption" sx={{ fontWeight: 600 }}>
           {title}
         </Typography>
-        <Typography variant="body2" sx={{ color: inks.quiet, flex: '1 1 14rem' }}>
+        <Typography variant="body2" sx={{ color: inks.quiet, flex: '1 1 20rem' }}>
           {note}
         </Typography>
-        <Box sx={{ display: 'flex', '@media print': { display: 'none' } }}>
+        <Box sx={{ display: 'flex', mx: -1, '@media print': { display: 'none' } }}>
           {tools}
           <ChartTool pressed={asTable} onClick={() => setAsTable(!asTable)}>
             Table

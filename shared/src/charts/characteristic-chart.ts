@@ -106,6 +106,8 @@ export function characteristicChart(
     plot.left + 20,
     plot.right - 20,
   );
+  // on a narrow page full-size circles would hide the curve and each other
+  const crowding = Math.min(1, Math.max(0.65, (plot.right - plot.left) / 600));
   const mostSamples = Math.max(1, ...points.map((point) => point.count));
   const curve = line<Bounds>(
     (at) => x(at.travel),
@@ -126,7 +128,7 @@ export function characteristicChart(
       ...point,
       x: x(point.travel),
       y: y.place(point.value),
-      radius: 2 + 3.5 * Math.sqrt(point.count / mostSamples),
+      radius: (2 + 3.5 * Math.sqrt(point.count / mostSamples)) * crowding,
     })),
     fitted: drawn(curve(fitted), fitted),
     beyondFitted: drawn(curve(below), below) + drawn(curve(above), above),

@@ -99,13 +99,16 @@ function bandWithin(band: { readonly low: number; readonly high: number }): { lo
 
 /** Under half a px there is nothing to see, and a hair of colour would make a healthy valve look ill. */
 function areaPath(places: readonly Place[], baseline: number): string {
-  if (places.every((place) => baseline - place.y < 0.5)) return '';
+  const seen = (place: Place): boolean => baseline - place.y >= 0.5;
+  const first = places.findIndex(seen);
+  const last = places.findLastIndex(seen);
+  if (first < 0) return '';
   return (
     area<Place>()
       .x((place) => place.x)
       .y0(baseline)
       .y1((place) => place.y)
-      .digits(pathDigits)(places) ?? ''
+      .digits(pathDigits)(places.slice(Math.max(0, first - 1), last + 2)) ?? ''
   );
 }
 
