@@ -15,26 +15,32 @@ afterEach(() => {
 
 describe('a saved drawing', () => {
   test('has the theme’s colours written out, and paper under it', () => {
-    const text = drawingText(aDrawing(), null);
+    const text = drawingText(aDrawing(), 'FV-1 flow', null);
     expect(text).toContain('stroke="#1e2a2f"');
     expect(text).toContain('fill="#f5f3ee"');
     expect(text).not.toContain('var(');
   });
 
   test('has a size of its own, so that any program opens it', () => {
-    expect(drawingText(aDrawing(), null)).toMatch(/<svg[^>]* width="320"[^>]* height="200"/);
+    expect(drawingText(aDrawing(), 'FV-1 flow', null)).toMatch(/<svg[^>]* width="348"[^>]* height="254"/);
+  });
+
+  test('says whose it is, above the drawing', () => {
+    const text = drawingText(aDrawing(), 'FV-1 flow', null);
+    expect(text).toMatch(/<text y="-14"[^>]*>FV-1 flow<\/text>/);
+    expect(text).toContain('viewBox="-14 -40 348 254"');
   });
 
   test('carries the typeface where it could be had', () => {
-    expect(drawingText(aDrawing(), 'data:font/woff2;base64,AAAA')).toContain(
+    expect(drawingText(aDrawing(), 'FV-1 flow', 'data:font/woff2;base64,AAAA')).toContain(
       'src:url(data:font/woff2;base64,AAAA)',
     );
-    expect(drawingText(aDrawing(), null)).not.toContain('@font-face');
+    expect(drawingText(aDrawing(), 'FV-1 flow', null)).not.toContain('@font-face');
   });
 
   test('leaves the cursor out and the drawing on the page alone', () => {
     const svg = aDrawing();
-    expect(drawingText(svg, null)).not.toContain('data-cursor');
+    expect(drawingText(svg, 'FV-1 flow', null)).not.toContain('data-cursor');
     expect(svg.querySelector('[data-cursor]')).not.toBeNull();
   });
 });

@@ -1,26 +1,35 @@
 import fontAddress from '@fontsource/roboto-condensed/files/roboto-condensed-latin-400-normal.woff2?url';
 
+const svgNames = 'http://www.w3.org/2000/svg';
+/** px above the drawing for its title: a file is read far from the page that named it. */
+const titleHeight = 40;
+/** px of paper around the other sides */
+const rim = 14;
+
 /**
- * The drawing as a file of its own: theme colours written out, paper under it, and the typeface inside it.
+ * The drawing as a file of its own: title above it, theme colours written out, paper under it, and the typeface
+ * inside it.
  *
  * @param svg the drawing on the page
+ * @param title whose drawing of what it is
  * @param font the typeface as a data address; null: the reader's machine takes a narrow one it has
  */
-export function drawingText(svg: SVGSVGElement, font: string | null): string {
+export function drawingText(svg: SVGSVGElement, title: string, font: string | null): string {
   const theme = getComputedStyle(svg);
   const copy = svg.cloneNode(true) as SVGSVGElement;
-  const [, , width = '0', height = '0'] = copy.getAttribute('viewBox')?.split(' ') ?? [];
-  copy.setAttribute('width', width);
-  copy.setAttribute('height', height);
-  copy.querySelectorAll('[data-cursor]').forEach((mark) => mark.remove());
-  const paper = copy.ownerDocument.createElementNS('http://www.w3.org/2000/svg', 'rect');
-  const style = copy.ownerDocument.createElementNS('http://www.w3.org/2000/svg', 'style');
-  for (const [name, value] of Object.entries({ width: '100%', height: '100%', fill: 'var(--tr-paper)' }))
-    paper.setAttribute(name, value);
+  copy.querySelectorAll('[data-cursor]').forEach((cursor) => cursor.remove());
+  const { width, height } = sizeOf(svg);
+  mark(copy, { viewBox: `${-rim} ${-titleHeight} ${width} ${height}`, width, height });
+  const style = document.createElementNS(svgNames, 'style');
   style.textContent = font
     ? `@font-face{font-family:"Roboto Condensed";src:url(${font}) format("woff2")}`
     : '';
-  copy.prepend(style, paper);
+  const paper = document.createElementNS(svgNames, 'rect');
+  mark(paper, { x: -rim, y: -titleHeight, width, height, fill: 'var(--tr-paper)' });
+  const heading = document.createElementNS(svgNames, 'text');
+  mark(heading, { y: 26 - titleHeight, 'font-size': 15, fill: 'var(--tr-ink)' });
+  heading.textContent = title;
+  copy.prepend(style, paper, heading);
   return new XMLSerializer()
     .serializeToString(copy)
     .replaceAll(
@@ -30,11 +39,21 @@ export function drawingText(svg: SVGSVGElement, font: string | null): string {
     .replaceAll('currentColor', theme.color || '#000');
 }
 
-/** Saves the drawing under a name, as SVG or as a PNG of twice the size on screen. */
-export async function saveDrawing(svg: SVGSVGElement, name: string, form: 'svg' | 'png'): Promise<void> {
-  const text = drawingText(svg, await typeface());
+/** Saves the drawing under its title, as SVG or as a PNG of twice the size on screen. */
+export async function saveDrawing(svg: SVGSVGElement, title: string, form: 'svg' | 'png'): Promise<void> {
+  const text = drawingText(svg, title, await typeface());
   const file = new Blob([text], { type: 'image/svg+xml' });
-  offer(form === 'svg' ? file : await raster(text, svg.clientWidth, svg.clientHeight), `${name}.${form}`);
+  offer(form === 'svg' ? file : await raster(text, sizeOf(svg)), `${title}.${form}`);
+}
+
+/** px of a saved drawing. */
+function sizeOf(svg: SVGSVGElement): { width: number; height: number } {
+  const [, , width = 0, height = 0] = (svg.getAttribute('viewBox') ?? '').split(' ').map(Number);
+  return { width: width + 2 * rim, height: height + titleHeight + rim };
+}
+
+function mark(element: Element, attributes: Record<string, string | number>): void {
+  for (const [name, value] of Object.entries(attributes)) element.setAttribute(name, String(value));
 }
 
 /** The shipped typeface; null where it cannot be fetched, which spoils the letters but not the drawing. */
@@ -56,12 +75,12 @@ function dataAddress(blob: Blob): Promise<string> {
   });
 }
 
-async function raster(text: string, width: number, height: number): Promise<Blob> {
+async function raster(text: string, size: { width: number; height: number }): Promise<Blob> {
   const image = new Image();
   image.src = `data:image/svg+xml;charset=utf-8,${encodeURIComponent(text)}`;
   await image.decode();
   const canvas = document.createElement('canvas');
-  [canvas.width, canvas.height] = [width * 2, height * 2];
+  [canvas.width, canvas.height] = [size.width * 2, size.height * 2];
   canvas.getContext('2d')?.drawImage(image, 0, 0, canvas.width, canvas.height);
   return new Promise((resolve, reject) => {
     canvas.toBlob((blob) => (blob ? resolve(blob) : reject(new Error('The picture could not be made.'))));
