@@ -29,7 +29,10 @@ export interface WindowUse {
   /** grid step, s */
   readonly step: number;
   readonly steadyWindows: number;
+  /** independent periods of steady windows (§1.10) */
   readonly periods: number;
+  /** slots of the same length in which the valve was in service: what findings on travel alone rest on */
+  readonly runningPeriods: number;
   /** left out, by reason: a sample or a grid point is counted once */
   readonly leftOut: Readonly<Record<string, number>>;
 }
@@ -90,6 +93,8 @@ export interface Deviation {
   /** where the shift is not identifiable: the shift that would explain the ratio as well, % travel */
   readonly equivalentShift: number | null;
   readonly notSeparable: CannotJudge | null;
+  /** true where a shift of travel explains the bins and a change of capacity does not (§4.3); the ratio is then the one beside the shift */
+  readonly offset: boolean;
   readonly worst: { readonly travel: number; readonly percent: number } | null;
   /** shape deviation by bin after the capacity ratio is taken out, and the tolerance of IEC 60534-2-4 there, % */
   readonly byTravel: readonly {
@@ -122,11 +127,30 @@ export interface OperatingRange {
   readonly ridge: readonly number[];
   readonly verdict:
     'oversized' | 'undersized' | 'rangeability not enough' | 'well sized' | 'acceptable' | null;
+  /** the verdict without the 48 h after each start; null where nothing is left */
+  readonly verdictAfterStarts: OperatingRange['verdict'];
   /** C(p95)/C(p5), null where no curve covers both */
   readonly rangeabilityUsed: number | null;
 }
 
+/** Reported travel while the valve was told to be shut, or wide open, for ten minutes or more (§4.4). */
+export interface EndReadings {
+  /** % travel, median over spells; null without such a spell */
+  readonly shut: { readonly travel: number; readonly spells: number } | null;
+  readonly open: { readonly travel: number; readonly spells: number } | null;
+}
+
+/** A spell in which a signal stood still while its partner moved (§1.3), s UTC. */
+export interface FrozenSpell {
+  readonly role: string;
+  readonly from: number;
+  readonly to: number;
+}
+
 export interface InstalledGain {
+  /** bins of travel the gain rests on, and the travel between the outermost, % */
+  readonly bins: number;
+  readonly span: number;
   readonly points: readonly { readonly travel: number; readonly gain: number }[];
   readonly min: Interval;
   readonly max: Interval;
@@ -180,6 +204,8 @@ export interface Movement {
         readonly spread: number;
         readonly sameSignDays: number;
         readonly slope: number;
+        /** the difference follows a curve of demand: a characterised signal, to be asked about, not a fault */
+        readonly characterised: boolean;
       }
     | CannotJudge;
 }
@@ -251,6 +277,15 @@ export interface Finding {
   readonly evidence: Readonly<Record<string, number | null>>;
 }
 
+/** A kind's figure whether it raised a finding or not: what keep levels and smoothing compare (§9.1, §9.3). */
+export interface KindFigure {
+  readonly kind: FindingKind;
+  readonly rule: string;
+  readonly x: number;
+  readonly raise: number;
+  readonly actNow: number;
+}
+
 export interface KindNotJudged {
   readonly kind: FindingKind | 'characteristic' | 'range';
   readonly reason: ReasonCode;
@@ -273,12 +308,15 @@ export interface Assessment {
   readonly deviation: Deviation | null;
   readonly range: OperatingRange | null;
   readonly gain: InstalledGain | null;
+  readonly endReadings: EndReadings;
+  readonly frozen: readonly FrozenSpell[];
   readonly movement: Movement | null;
   readonly drift: Drift | null;
   readonly passing: Passing | CannotJudge | null;
   readonly service: ServiceStress | null;
   readonly findings: readonly Finding[];
   readonly notJudged: readonly KindNotJudged[];
+  readonly figures: readonly KindFigure[];
   /** things the reader must know: role swapped, crossed pressures, outlier filter off … */
   readonly warnings: readonly { readonly code: string; readonly figures: Readonly<Record<string, number>> }[];
   /** 0 to 100; null for trip valves */

@@ -7,7 +7,7 @@ import { type FindingKind } from './kinds.js';
 /** The chapters of an assessment a finding is measured on: everything but the findings themselves. */
 export type Chapters = Omit<
   Assessment,
-  'findings' | 'notJudged' | 'attention' | 'attentionTerms' | 'judged' | 'reason'
+  'findings' | 'figures' | 'notJudged' | 'attention' | 'attentionTerms' | 'judged' | 'reason'
 >;
 
 /** A kind's figure on one assessment, before severity, confidence and hysteresis, which are the same for all. */
@@ -26,6 +26,8 @@ export interface Measure {
   readonly severityFactor: number;
   /** what the figure rests on: decides the source part of confidence (§9.1) */
   readonly rests: { readonly onPosition: boolean; readonly onPressures: boolean };
+  /** the figure is a plain fact of its own record, which needs no minimum of data to be said */
+  readonly ofRecord?: boolean;
   readonly evidence: Readonly<Record<string, number | null>>;
 }
 
