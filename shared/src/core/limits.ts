@@ -130,37 +130,82 @@ export const defaultLimits = {
     gainFloor: 0.05,
   },
   movement: {
-    /** §6 */
+    /** §6.1 zig-zag threshold of the travel */
     zigZag: 1,
+    /** §6.2; the longest block is ours: ten cycles of 9 h fit in it */
     samplesPerCycle: 5,
-    jumpScan: 10,
-    blockHours: [1, 6, 24],
+    blockHours: [1, 6, 24, 96],
+    blockCycles: 10,
+    blockCoverage: 0.8,
+    leastBlocks: 3,
     regularity: 1,
     oscillationAmplitude: 0.4,
+    /** autocorrelation at one and at three periods */
+    oscillationFirst: 0.5,
+    oscillationThird: 0.3,
+    /** periods within this ratio of each other are one oscillation */
+    oscillationSpread: 1.3,
+    /** a set point swinging at least this share of the process value is the cause */
+    setPointShare: 0.5,
+    /** §6.3 */
     directionThreshold: 0.5,
+    directionNeed: 1,
+    directionNeedRatio: 1.25,
+    /** how far the reference may have come back from its furthest point */
+    directionRetreat: 0.15,
     slowSeconds: 60,
     slowMove: 1.5,
+    slowShare: 0.05,
+    directionBinWidth: 2,
     directionBinSamples: 12,
     directionBins: 3,
+    /** added to the threshold of a split against the flow where no pressures are recorded */
+    withoutPressures: 0.5,
+    /** §6.4 */
+    jumpScan: 10,
     restTravel: 0.35,
     restSeconds: 30,
     jumpTravel: 0.5,
     jumpSeconds: 20,
     jumpDemandRatio: 2,
+    jumpZigZag: 0.3,
     jumpShare: 0.15,
     jumpMedian: 0.6,
+    /** §6.5 */
     mismatchDays: 0.9,
+    mismatchLow: 2,
+    mismatchHigh: 98,
   },
   drift: {
-    /** §7 */
+    /** §7.1 */
     months: 8,
     weeks: 10,
     windowsPerMonth: 20,
     daysPerMonth: 5,
+    /** shorter segments of short records: how many, and the windows each needs */
+    segments: 10,
+    windowsPerSegment: 3,
+    binWidth: 2,
+    referenceDays: 60,
+    referenceShare: 1 / 3,
+    /** §7.2 */
     significance: 0.01,
-    change: 0.04,
+    change: 0.03,
+    changeSpreads: 3,
+    /** §7.3 */
+    stepPenalty: 3,
+    stepSpreads: 3,
+    stepSegments: 3,
+    mostPoints: 400,
+    /** §4.4 */
+    endSeconds: 600,
+    endDemand: 99.5,
+    /** §7.5 */
     passingSeconds: 900,
     passingDropShare: 0.25,
+    passingSpells: 2,
+    passingTotalSeconds: 7_200,
+    passingCutOffs: 2,
   },
   stress: {
     /** §2.1 choked from this share of the choked pressure drop; §8 */
