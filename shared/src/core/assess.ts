@@ -56,7 +56,8 @@ export function assess(
   const { characteristic } = fit;
   const comparison = compareWithSheet(windows, fit.bins, sheet, random, limits);
   const range = operatingRange(prepared, sheet, curveOf(fit), limits);
-  const gain = installedGain(prepared, windows, range, characteristic, random, limits);
+  const gain =
+    characteristic === null ? null : installedGain(prepared, windows, range, characteristic, random, limits);
 
   const chapters: Chapters = {
     tag: valve.tag,
@@ -70,7 +71,7 @@ export function assess(
     characteristic,
     deviation: characteristic === null ? null : comparison.deviation,
     range,
-    gain: 'points' in gain ? gain : null,
+    gain: gain !== null && 'points' in gain ? gain : null,
     endReadings: endReadings(prepared, limits),
     frozen: prepared.frozen,
     movement: null,

@@ -36,6 +36,7 @@ export const reasonCodes = [
   'choked-throughout',
   'outside-the-standard',
   'flow-falls-as-valve-opens',
+  'flow-does-not-follow',
   'trip-valve',
 ] as const;
 export type ReasonCode = (typeof reasonCodes)[number];

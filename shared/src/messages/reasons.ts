@@ -65,6 +65,8 @@ const sentences: Record<ReasonCode, (f: Figures) => string> = {
     'The service is outside IEC 60534-2-1 (two-phase, slurry or wet steam); only the installed characteristic is shown.',
   'flow-falls-as-valve-opens': () =>
     'The flow falls as the signal rises. If the valve is reverse acting, say so on the signal; otherwise check which tag is which.',
+  'flow-does-not-follow': () =>
+    'The flow does not follow the travel here: what else moves it is larger. A record that covers more travel, or recorded pressures, would do.',
   'trip-valve': () => 'Safety-instrumented or trip duty: not judged for tuning or trim.',
 };
 

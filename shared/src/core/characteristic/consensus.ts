@@ -4,7 +4,7 @@ import { type SteadyWindows } from '../preparation/steady-windows.js';
 import { cannotJudge, type CannotJudge } from '../reasons.js';
 import { fitKinds } from './fit-kinds.js';
 import { kindVerdict } from './kind-verdict.js';
-import { travelBins } from './travel-bins.js';
+import { regularBins, travelBins } from './travel-bins.js';
 
 /**
  * A kind from a modelled pressure drop stands only if it stays the verdict when the design drop is wrong by its
@@ -37,12 +37,7 @@ export function consensusKind(
       // C ∝ 1/√ΔP: exact for liquids, close for gases below choking
       return other > 0 ? value + 0.5 * Math.log(drop / other) : NaN;
     });
-    const bins = travelBins(
-      windows,
-      L,
-      { windows: limits.characteristic.binWindows, periods: limits.characteristic.binPeriods, demandOnly },
-      limits,
-    );
+    const bins = travelBins(windows, L, regularBins(demandOnly, limits), limits);
     if (bins.count < 2 || kindVerdict(fitKinds(bins, limits), bins, limits) !== kind)
       return cannotJudge('design-pressures-disagree');
   }

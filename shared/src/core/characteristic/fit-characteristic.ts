@@ -1,14 +1,14 @@
 import { type CharacteristicPoint, type CurvePoint, type EffectiveCharacteristic } from '../assessment.js';
 import { type SteadyWindows } from '../preparation/steady-windows.js';
 import { cannotJudge, type CannotJudge } from '../reasons.js';
-import { sortedQuantile } from '../statistics/quantile.js';
+import { median, sortedQuantile } from '../statistics/quantile.js';
 import { weightedLine } from '../statistics/regression.js';
 import { dayResamples } from './day-resamples.js';
 import { type CharacteristicSetting, decideKind } from './decide-kind.js';
 import { basesAt, fitKinds, fittedLog, type KindFit, refitKind, shapeParameter } from './fit-kinds.js';
 import { installedCurve } from './installed-curve.js';
 import { descriptiveStep, parameterIntervals } from './parameter-intervals.js';
-import { type BinRules, spanOf, travelBins, type TravelBins } from './travel-bins.js';
+import { regularBins, spanOf, travelBins, type TravelBins } from './travel-bins.js';
 
 /** The effective characteristic with what later chapters build on. */
 export interface CharacteristicFit {
@@ -51,19 +51,24 @@ export function fitCharacteristic(windows: SteadyWindows, setting: Characteristi
     );
   }
   if (fallsAsItOpens(bins)) return refuse(cannotJudge('flow-falls-as-valve-opens'));
-  return windows.source === 'none' ? installed(windows, bins, setting) : inherent(windows, bins, setting);
+  if (windows.source !== 'none') return inherent(windows, bins, setting);
+  // flow alone: what moves it besides the valve has to be told apart from the valve
+  if (span < limits.range.gainSpan)
+    return refuse(cannotJudge('span-too-small', { span, needed: limits.range.gainSpan }));
+  if (!flowFollows(bins)) return refuse(cannotJudge('flow-does-not-follow'));
+  return installed(windows, bins, setting);
 }
 
-/** The handbook's bins; where a record is too short to visit a travel twice, bins visited once. */
+/** Bin width for records that pass each travel once, % (our choice). */
+const wideBins = 5;
+
+/** The handbook's bins; where a record is too short to visit a travel twice, wider bins visited once. */
 function bestBins(windows: SteadyWindows, { limits, travelSource }: CharacteristicSetting): TravelBins {
-  const rules: BinRules = {
-    windows: limits.characteristic.binWindows,
-    periods: limits.characteristic.binPeriods,
-    demandOnly: travelSource === 'demand',
-  };
+  const rules = regularBins(travelSource === 'demand', limits);
   const bins = travelBins(windows, windows.L, rules, limits);
   if (bins.count >= fewestBins) return bins;
-  return travelBins(windows, windows.L, { ...rules, periods: 1 }, limits);
+  const wider = travelBins(windows, windows.L, { ...rules, width: wideBins, periods: 1 }, limits);
+  return wider.count >= fewestBins ? wider : bins;
 }
 
 /** A curve that clearly falls: the signal is reverse acting or two tags are exchanged. */
@@ -78,6 +83,14 @@ function fallsAsItOpens(bins: TravelBins): boolean {
     left += ((bins.y[b] as number) - intercept - slope * (bins.h[b] as number)) ** 2;
   }
   return left < 0.5 * explained;
+}
+
+/** Rise of the installed curve over its span, in standard errors of a bin, from which the valve is seen in it (our choice). */
+const visibleRise = 3;
+
+function flowFollows(bins: TravelBins): boolean {
+  const rise = weightedLine(bins.h, bins.y, bins.weight).slope * spanOf(bins);
+  return rise >= (visibleRise * median(bins.spread)) / Math.sqrt(median(bins.periods));
 }
 
 function installed(

@@ -28,8 +28,20 @@ export interface TravelBins {
 export interface BinRules {
   readonly windows: number;
   readonly periods: number;
+  /** % travel */
+  readonly width: number;
   /** demand stands in for position: end bins thinly visited and bins far more scattered than the rest go */
   readonly demandOnly: boolean;
+}
+
+/** The handbook's rules (§3.1). */
+export function regularBins(demandOnly: boolean, { characteristic }: Limits): BinRules {
+  return {
+    windows: characteristic.binWindows,
+    periods: characteristic.binPeriods,
+    width: characteristic.binWidth,
+    demandOnly,
+  };
 }
 
 /**
@@ -44,7 +56,7 @@ export function travelBins(
   rules: BinRules,
   limits: Limits,
 ): TravelBins {
-  const width = limits.characteristic.binWidth / 100;
+  const width = rules.width / 100;
   const members = new Map<number, number[]>();
   for (let i = 0; i < windows.count; i++) {
     if (windows.choked[i] === 1 || !Number.isFinite(L[i])) continue;

@@ -7,7 +7,7 @@ const enough = { periods: 30, days: 14 };
 /** What each kind of source is worth (§9.1). */
 const source = { demandForPosition: 0.8, modelledDrop: 0.7, installed: 0.6 };
 /** Least share of full confidence for a plain fact of a short record (our choice). */
-const factOfShortRecord = 0.5;
+const factOfShortRecord = 0.6;
 
 /**
  * Confidence of a measure, 0 to 1: amount of data × chance that the figure truly is beyond its threshold × what

@@ -75,22 +75,22 @@ export function recordedSignals(
       continue;
     }
     const resolution = resolutionOf(clean.value);
-    let value = clean.value;
+    let { time, value } = clean;
     let outliers = 0;
     if (filtered.includes(role)) {
       const near = changes === null ? null : nearAny(clean.time, changes, 3);
       const result = removeOutliers(
-        value,
+        clean,
         resolution ?? 0,
         { halfWidth: rules.hampelHalfWidth, spread: rules.hampelSpread, share: rules.hampelShare },
         near,
       );
-      ({ value, removed: outliers } = result);
+      ({ time, value, removed: outliers } = result);
       count('outlier', outliers);
       if (result.off) warnings.push({ code: `${role}-outliers-kept`, figures: {} });
     }
     used += clean.time.length - clean.bad - clean.outOfRange - outliers;
-    signals[role] = { ...clean, value, pace, gap, resolution, outliers };
+    signals[role] = { ...clean, time, value, pace, gap, resolution, outliers };
   }
   return { signals, flowSpan, seen, used, leftOut, warnings };
 }

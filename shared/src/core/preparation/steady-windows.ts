@@ -89,7 +89,8 @@ function enoughWindows(prepared: Prepared, needPressures: boolean, limits: Limit
   for (const length of windowLengths(prepared, limits)) {
     const cut = cutWindows(prepared, length, needPressures, limits);
     if (best === null || cut.count > best.count) best = cut;
-    if (cut.count >= limits.windows.least) break;
+    const share = (cut.count * length.seconds) / (prepared.count * prepared.step);
+    if (cut.count >= limits.windows.least && share >= length.leastShare) break;
   }
   return best as CutWindows;
 }

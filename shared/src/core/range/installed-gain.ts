@@ -5,7 +5,7 @@ import {
   type OperatingRange,
 } from '../assessment.js';
 import { dayResamples } from '../characteristic/day-resamples.js';
-import { travelBins, type TravelBins, spanOf } from '../characteristic/travel-bins.js';
+import { regularBins, spanOf, travelBins, type TravelBins } from '../characteristic/travel-bins.js';
 import { type Limits } from '../limits.js';
 import { type Prepared } from '../preparation/prepared.js';
 import { type SteadyWindows } from '../preparation/steady-windows.js';
@@ -33,7 +33,7 @@ export function installedGain(
   prepared: Prepared,
   windows: SteadyWindows,
   range: OperatingRange | null,
-  characteristic: EffectiveCharacteristic | null,
+  characteristic: EffectiveCharacteristic,
   random: () => number,
   limits: Limits,
 ): InstalledGain | CannotJudge {
@@ -42,16 +42,7 @@ export function installedGain(
   if (range === null) return cannotJudge('valve-not-in-service');
   const flow = windows.flow.map((q) => (100 * q) / prepared.flowSpan);
   const whole = { ...windows, choked: new Uint8Array(windows.count) };
-  const bins = travelBins(
-    whole,
-    flow,
-    {
-      windows: limits.characteristic.binWindows,
-      periods: limits.characteristic.binPeriods,
-      demandOnly: prepared.travelSource === 'demand',
-    },
-    limits,
-  );
+  const bins = travelBins(whole, flow, regularBins(prepared.travelSource === 'demand', limits), limits);
   if (bins.count < rules.gainBins)
     return cannotJudge('too-few-bins', { bins: bins.count, needed: rules.gainBins });
   const span = 100 * spanOf(bins);
@@ -61,7 +52,7 @@ export function installedGain(
   if (!(to - from >= 1))
     return cannotJudge('span-too-small', { span: Math.max(0, to - from), needed: rules.gainSpan });
   const at = Array.from({ length: points }, (_, i) => from + ((to - from) * i) / (points - 1));
-  const cubic = characteristic?.kind === 'equal percentage';
+  const cubic = characteristic.kind === 'equal percentage';
   const slopes = (y: Float64Array) => (cubic ? cubicSlopes(bins, y, at) : localSlopes(bins, y, at, limits));
 
   const gain = slopes(bins.y);
