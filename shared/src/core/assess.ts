@@ -13,6 +13,7 @@ import { attentionOf } from './findings/attention.js';
 import { find } from './findings/find.js';
 import { type Chapters } from './findings/finding-rule.js';
 import { defaultLimits, type Limits } from './limits.js';
+import { movementOf } from './movement/movement.js';
 import { prepare } from './preparation/prepare.js';
 import { type Prepared, valveState } from './preparation/prepared.js';
 import { type SteadyWindows, steadyWindows } from './preparation/steady-windows.js';
@@ -46,10 +47,11 @@ export function assess(
   const random = seededRandom(seedFrom(valve.tag, span.from, span.to, methodVersion));
 
   const windows = steadyWindows(prepared, sheet, limits);
+  const movement = movementOf(prepared, windows, sheet, limits);
   const fit = fitCharacteristic(windows, {
     sheet,
     travelSource: prepared.travelSource,
-    deadBand: null,
+    deadBand: 'deadBand' in movement.demandToFlow ? movement.demandToFlow.deadBand : null,
     random,
     limits,
   });
@@ -74,7 +76,7 @@ export function assess(
     gain: gain !== null && 'points' in gain ? gain : null,
     endReadings: endReadings(prepared, limits),
     frozen: prepared.frozen,
-    movement: null,
+    movement,
     drift: null,
     passing: null,
     service: null,

@@ -21,13 +21,16 @@ export interface Outliers {
   readonly off: boolean;
 }
 
+/** Times the usual bend of the record from which a sample is looked at. */
+const noticeable = 3;
+
 /**
  * Hampel filter: a value further than `spread` MADs from the median of its window, and further than twice the
  * resolution, is not a measurement.
  *
- * A value is only looked at where it stands away from the middle of its two neighbours by more than twice the
- * usual amount of the record; an isolated spike always does. That keeps the windows sorted to about one in
- * twenty: 15 ms instead of 250 ms for a million samples.
+ * A value is only looked at where it stands away from the middle of its two neighbours by more than three times the
+ * usual amount of the record; an isolated spike always does. That leaves a few windows in a thousand to sort instead
+ * of all: about 10 ms instead of some 300 ms for a million samples.
  *
  * @param signal ascending times, and values that are NaN where not known
  * @param resolution of the signal, same unit
@@ -42,7 +45,7 @@ export function removeOutliers(
 ): Outliers {
   const { time, value } = signal;
   const n = value.length;
-  const usual = usualBend(value);
+  const least = Math.max(noticeable * usualBend(value), resolution);
   const K = rules.halfWidth;
   const allowed = rules.share * n;
   const window = new Float64Array(2 * K + 1);
@@ -50,8 +53,8 @@ export function removeOutliers(
   for (let i = 1; i + 1 < n; i++) {
     const x = value[i] as number;
     const bend = Math.abs(x - ((value[i - 1] as number) + (value[i + 1] as number)) / 2);
-    if (bend <= 2 * usual || bend <= resolution) continue;
-    if (Number.isNaN(x) || protectedAt?.[i] === 1) continue;
+    // NaN among the three compares false: a sample beside a mark is left alone
+    if (!(bend > least) || protectedAt?.[i] === 1) continue;
     if (isOutlier(value, i, window, rules.spread, 2 * resolution)) outliers.push(i);
     if (outliers.length > allowed) return { time, value, removed: 0, off: true };
   }

@@ -34,7 +34,8 @@ export function operatingRange(
   const judged = (all.running * prepared.step) / secondsPerDay >= limits.range.days - 1e-6;
   const covered =
     logCurve !== null && shares.p5 >= 100 * logCurve.from - 2 && shares.p95 <= 100 * logCurve.to + 2;
-  const settled = tally(prepared, band, limits, limits.range.startHours * 3_600);
+  const started = prepared.state.some((s) => (s & valveState.settling) !== 0);
+  const settled = started ? tally(prepared, band, limits, limits.range.startHours * 3_600) : all;
   return {
     judged,
     ...shares,
