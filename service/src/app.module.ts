@@ -1,0 +1,24 @@
+import { DynamicModule, Module } from '@nestjs/common';
+import { ScheduleModule } from '@nestjs/schedule';
+import { AuditModule } from './audit/audit.module.js';
+import { PeopleModule } from './people/people.module.js';
+import { type Config } from './platform/config.js';
+import { PlatformModule } from './platform/platform.module.js';
+import { ValvesModule } from './valves/valves.module.js';
+
+/** The product's table of contents, in the one order modules may import each other. */
+@Module({})
+export class AppModule {
+  static forRoot(config: Config): DynamicModule {
+    return {
+      module: AppModule,
+      imports: [
+        PlatformModule.forRoot(config),
+        ScheduleModule.forRoot(),
+        AuditModule,
+        PeopleModule,
+        ValvesModule,
+      ],
+    };
+  }
+}
