@@ -1,6 +1,5 @@
 import { type RegisterDataSheet } from '@tailrace/shared/contracts/valves';
-import { Column, Entity, Index, JoinColumn, ManyToOne, PrimaryColumn, type Relation } from 'typeorm';
-import { ValveEntity } from './valve.entity.js';
+import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
 
 /** One state of a valve's data sheet. Former ones are kept: what was judged against them stays explainable. */
 @Entity('data_sheets')
@@ -9,9 +8,6 @@ import { ValveEntity } from './valve.entity.js';
 export class DataSheetEntity {
   @PrimaryColumn('text') id: string;
   @Column('text') valveId: string;
-  @ManyToOne(() => ValveEntity, (valve) => valve.sheets, { onDelete: 'CASCADE' })
-  @JoinColumn({ name: 'valveId' })
-  valve: Relation<ValveEntity>;
   @Column('integer') number: number;
   @Column('boolean') current: boolean;
   @Column('simple-json') sheet: RegisterDataSheet;

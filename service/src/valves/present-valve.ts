@@ -17,7 +17,7 @@ export function presentValve(valve: ValveEntity): Valve {
 
 /** The register's own JSON form of a valve: what the analysis and the command line read. */
 export function valveFormOf(valve: ValveEntity): ValveForm {
-  return { tag: valve.tag, dataSheet: currentSheet(valve).sheet, signals: signalsOf(valve.signals) };
+  return { tag: valve.tag, dataSheet: currentSheet(valve).sheet, signals: signalsOf(valve.signals ?? []) };
 }
 
 export function presentValveRow(valve: ValveEntity): ValveRow {
@@ -32,14 +32,13 @@ export function presentValveRow(valve: ValveEntity): ValveRow {
     coefficientUnit: sheet.coefficientUnit,
     criticality: valve.criticality,
     trip: valve.trip,
-    signalRoles: valve.signals.map((signal) => signal.role),
+    signalRoles: (valve.signals ?? []).map((signal) => signal.role),
   };
 }
 
 function currentSheet(valve: ValveEntity): DataSheetEntity {
-  const sheet = valve.sheets.find((candidate) => candidate.current);
-  if (!sheet) throw new Error(`valve ${valve.tag} was loaded without its current data sheet`);
-  return sheet;
+  if (!valve.sheet) throw new Error(`valve ${valve.tag} was loaded without its current data sheet`);
+  return valve.sheet;
 }
 
 function signalsOf(signals: readonly SignalEntity[]): Signals {

@@ -1,6 +1,5 @@
 import { type SignalRole } from '@tailrace/shared/core/series';
-import { Column, Entity, Index, JoinColumn, ManyToOne, PrimaryColumn, type Relation } from 'typeorm';
-import { ValveEntity } from './valve.entity.js';
+import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
 
 /** One historian tag bound to one role of one valve. */
 @Entity('signals')
@@ -9,9 +8,6 @@ import { ValveEntity } from './valve.entity.js';
 export class SignalEntity {
   @PrimaryColumn('text') id: string;
   @Column('text') valveId: string;
-  @ManyToOne(() => ValveEntity, (valve) => valve.signals, { onDelete: 'CASCADE' })
-  @JoinColumn({ name: 'valveId' })
-  valve: Relation<ValveEntity>;
   @Column('text') role: SignalRole;
   @Column('text') historianTag: string;
   @Column('text', { nullable: true }) unit: string | null;

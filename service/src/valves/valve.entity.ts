@@ -1,17 +1,8 @@
 import { type Criticality } from '@tailrace/shared/core/data-sheet';
-import {
-  Column,
-  Entity,
-  Index,
-  JoinColumn,
-  ManyToOne,
-  OneToMany,
-  PrimaryColumn,
-  type Relation,
-} from 'typeorm';
+import { Column, Entity, Index, JoinColumn, ManyToOne, PrimaryColumn } from 'typeorm';
 import { AreaEntity } from '../people/area.entity.js';
-import { DataSheetEntity } from './data-sheet.entity.js';
-import { SignalEntity } from './signal.entity.js';
+import { type DataSheetEntity } from './data-sheet.entity.js';
+import { type SignalEntity } from './signal.entity.js';
 
 /** One control valve, known by its tag. What the lists sort by is copied here from its data sheet. */
 @Entity('valves')
@@ -32,8 +23,7 @@ export class ValveEntity {
   /** ms UTC */
   @Column('integer') createdAt: number;
   @Column('integer') updatedAt: number;
-  @OneToMany(() => DataSheetEntity, (sheet) => sheet.valve)
-  sheets: Relation<DataSheetEntity>[];
-  @OneToMany(() => SignalEntity, (signal) => signal.valve)
-  signals: Relation<SignalEntity>[];
+  /** the current data sheet and the signals, where the query joins them */
+  sheet?: DataSheetEntity;
+  signals?: SignalEntity[];
 }

@@ -122,8 +122,13 @@ export class ValvesService {
     const query = manager
       .createQueryBuilder(ValveEntity, 'valve')
       .innerJoinAndSelect('valve.area', 'area')
-      .innerJoinAndSelect('valve.sheets', 'sheet', 'sheet.current = 1')
-      .leftJoinAndSelect('valve.signals', 'signal');
+      .innerJoinAndMapOne(
+        'valve.sheet',
+        DataSheetEntity,
+        'sheet',
+        'sheet.valveId = valve.id AND sheet.current = 1',
+      )
+      .leftJoinAndMapMany('valve.signals', SignalEntity, 'signal', 'signal.valveId = valve.id');
     return visibleTo(actor, query, 'valve.areaId');
   }
 
