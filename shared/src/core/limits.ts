@@ -132,12 +132,15 @@ export const defaultLimits = {
   movement: {
     /** §6.1 zig-zag threshold of the travel */
     zigZag: 1,
-    /** §6.2; the longest block is ours: ten cycles of 9 h fit in it */
+    /** §6.2; blocks hold 10 to 20 cycles of the periods they are asked about, whatever the pace (ours) */
     samplesPerCycle: 5,
-    blockHours: [1, 6, 24, 96],
+    longestPeriod: 30_000,
+    stepFreeCell: 120,
     blockCycles: 10,
     blockCoverage: 0.8,
     leastBlocks: 3,
+    /** steps of the travel are held at this many spreads of its ordinary changes */
+    stepClip: 1.5,
     regularity: 1,
     oscillationAmplitude: 0.4,
     /** autocorrelation at one and at three periods */

@@ -1,4 +1,6 @@
 import FFT from 'fft.js';
+import { madFactor } from '../statistics/mad.js';
+import { medianInPlace } from '../statistics/quantile.js';
 
 /** What a block of a signal shows of one period. */
 export interface BlockOscillation {
@@ -18,22 +20,31 @@ export interface BlockRules {
   readonly regularity: number;
   readonly first: number;
   readonly third: number;
+  /** changes from cell to cell beyond this many spreads are held there */
+  readonly clip: number;
 }
 
 const crossingsWanted = 11;
-/** Cycles a block must hold for a frequency to be looked at. */
-const fewestCycles = 6;
 /** The band goes from a third to three times the peak. */
 const bandRatio = 3;
+/** The amplitude is taken from this part of the peak upwards: what lies lower is the load's wandering. */
+const amplitudeFrom = 2 / 3;
+/** Held changes below this share of the whole: most of the movement was held. */
+const jumpRatio = 0.5;
 const taperShare = 0.1;
-/** Tried where the strongest peak is not regular: the strongest after weighting by frequency. */
-const weightings = [0, 1] as const;
+/** Lags needed, in longest periods: eleven zero crossings, and a little. */
+const lagPeriods = 5.75;
 
 /**
- * Finds an oscillation in a block of evenly spaced cells: the same sizes are used for every block of a record, so
+ * Finds an oscillation in a block of evenly spaced cells: the same sizes are used for every block of an octave, so
  * its buffers and tables are made once.
  *
- * Source: Thornhill, Huang & Zhang 2003; methods.md §6.2
+ * The test is that of Thornhill, Huang & Zhang (2003) on zero crossings of the autocorrelation, with two changes of
+ * ours, both old practice: it is taken on changes from cell to cell (prewhitening, Blackman & Tukey 1958), and
+ * changes beyond a few spreads are held there (winsorising, Huber 1964). A step of set point or load, which in the
+ * travel outweighs every oscillation of the block, is then one change among many.
+ *
+ * Source: methods.md §6.2
  */
 export class BlockSpectrum {
   private readonly fft: FFT;
@@ -45,47 +56,93 @@ export class BlockSpectrum {
   private readonly spectrum: Float64Array;
   private readonly power: Float64Array;
   private readonly correlation: Float64Array;
+  private readonly changes: Float64Array;
+  private readonly sizes: Float64Array;
   private readonly length: number;
+  private readonly lastLag: number;
 
   /** @param cells length of a block */
-  constructor(private readonly cells: number) {
+  constructor(
+    private readonly cells: number,
+    private readonly rules: BlockRules,
+  ) {
+    this.lastLag = Math.min(cells - 1, Math.ceil(lagPeriods * rules.longest));
     let length = 2;
-    while (length < 1.65 * cells) length *= 2;
+    while (length < cells + this.lastLag) length *= 2;
     this.length = length;
     this.fft = new FFT(length);
     this.input = new Float64Array(length);
     this.spectrum = new Float64Array(2 * length);
     this.power = new Float64Array(length / 2 + 1);
     this.correlation = new Float64Array(2 * length);
+    this.changes = new Float64Array(cells);
+    this.sizes = new Float64Array(cells);
     this.taper = tukey(cells);
     this.input.set(this.taper);
-    this.overlap = this.autocorrelation().slice();
+    this.transform();
+    this.overlap = this.bandCorrelation(0, length / 2).slice();
     this.taperPower = (this.overlap[0] as number) / cells;
     const whole = this.overlap[0] as number;
     for (let lag = 0; lag < length; lag++) this.overlap[lag] = (this.overlap[lag] as number) / whole;
   }
 
   /**
-   * @param block cells values without NaN; used up
+   * @param block cells values without NaN
    * @returns null where the block does not oscillate
    */
-  find(block: Float64Array, rules: BlockRules): BlockOscillation | null {
-    const { input, cells } = this;
-    const rms = detrend(block);
-    // √2·rms of the whole is the most a band of it can have
-    if (!(Math.SQRT2 * rms >= rules.amplitude)) return null;
-    for (let i = 0; i < cells; i++) input[i] = (block[i] as number) * (this.taper[i] as number);
+  find(block: Float64Array): BlockOscillation | null {
+    const { rules } = this;
+    const { hold, rms } = this.changesOf(block);
+    // the longest period makes the smallest changes: less than this cannot be an oscillation worth a word
+    const least = (rules.amplitude * 2 * Math.sin(Math.PI / rules.longest)) / Math.SQRT2;
+    if (!(rms >= least)) return null;
+    const held = this.holdAt(hold);
+    const found = held >= least ? this.look() : null;
+    if (found !== null || !(held < jumpRatio * rms)) return found;
+    // a stem that rests and jumps changes in few cells only: what was held is then the oscillation itself
+    this.changesOf(block);
+    this.holdAt(Infinity);
+    return this.look();
+  }
+
+  private look(): BlockOscillation | null {
+    const { input, changes, cells } = this;
+    for (let i = 0; i < cells; i++) input[i] = (changes[i] as number) * (this.taper[i] as number);
     input.fill(0, cells);
     this.transform();
-    let tried = -1;
-    for (const weighting of weightings) {
-      const peak = this.strongest(rules, weighting);
-      if (peak <= 0 || peak === tried) continue;
-      tried = peak;
-      const found = this.judge(peak, rules);
-      if (found !== null) return found;
+    const peak = this.strongest();
+    return peak > 0 ? this.judge(peak) : null;
+  }
+
+  /** Changes from cell to cell; where they would be held, and their rms. */
+  private changesOf(block: Float64Array): { hold: number; rms: number } {
+    const { changes, sizes, cells } = this;
+    let squares = 0;
+    changes[0] = 0;
+    for (let i = 1; i < cells; i++) {
+      const change = (block[i] as number) - (block[i - 1] as number);
+      changes[i] = change;
+      sizes[i] = Math.abs(change);
+      squares += change * change;
     }
-    return null;
+    const hold = this.rules.clip * madFactor * medianInPlace(sizes, 1, cells);
+    return { hold, rms: Math.sqrt(squares / (cells - 1)) };
+  }
+
+  /** Holds the changes at ±hold and takes their mean out; returns the rms of what is left. */
+  private holdAt(hold: number): number {
+    const { changes, cells } = this;
+    let sum = 0;
+    let squares = 0;
+    for (let i = 1; i < cells; i++) {
+      const change = Math.min(hold, Math.max(-hold, changes[i] as number));
+      changes[i] = change;
+      sum += change;
+      squares += change * change;
+    }
+    const mean = sum / (cells - 1);
+    for (let i = 1; i < cells; i++) changes[i] = (changes[i] as number) - mean;
+    return Math.sqrt(Math.max(0, squares / (cells - 1) - mean * mean));
   }
 
   private transform(): void {
@@ -98,33 +155,33 @@ export class BlockSpectrum {
     }
   }
 
-  private strongest(rules: BlockRules, weighting: 0 | 1): number {
-    const { length, power } = this;
-    const low = Math.max(2, Math.ceil(length / rules.longest));
-    const high = Math.min(length / 2 - 1, Math.floor(length / rules.shortest));
+  private strongest(): number {
+    const { length, power, rules } = this;
+    const low = Math.max(2, Math.floor(length / rules.longest));
+    const high = Math.min(length / 2 - 1, Math.ceil(length / rules.shortest));
     let best = 0;
     let most = 0;
     for (let k = low; k <= high; k++) {
-      const p = (power[k - 1] as number) + (power[k] as number) + (power[k + 1] as number);
-      const weighted = weighting === 0 ? p : p * k;
-      if (weighted > most) {
-        most = weighted;
+      const p = (power[k - 1] as number) + 2 * (power[k] as number) + (power[k + 1] as number);
+      if (p > most) {
+        most = p;
         best = k;
       }
     }
     return best;
   }
 
-  private judge(peak: number, rules: BlockRules): BlockOscillation | null {
-    const { power, length, cells } = this;
-    const low = Math.max(Math.ceil(peak / bandRatio), Math.ceil((fewestCycles * length) / cells));
+  private judge(peak: number): BlockOscillation | null {
+    const { power, length, rules } = this;
+    const low = Math.max(1, Math.ceil(peak / bandRatio));
     const high = Math.min(Math.floor(peak * bandRatio), length / 2 - 1);
     let band = 0;
     for (let k = low; k <= high; k++) band += power[k] as number;
-    const amplitude = Math.SQRT2 * Math.sqrt((2 * band) / (length * cells * this.taperPower));
-    if (!(amplitude >= rules.amplitude) || !this.promising(peak, low, high, band, rules.first)) return null;
+    if (!this.promising(peak, low, high, band)) return null;
+    const amplitude = this.amplitudeOf(peak, high);
+    if (!(amplitude >= rules.amplitude)) return null;
     const r = this.bandCorrelation(low, high);
-    const intervals = crossingIntervals(r, Math.floor(0.65 * cells));
+    const intervals = crossingIntervals(r, this.lastLag);
     if (intervals === null) return null;
     const period = 2 * intervals.mean;
     const regularity = intervals.mean / (3 * intervals.sd);
@@ -133,47 +190,43 @@ export class BlockSpectrum {
     return { period, regularity, amplitude };
   }
 
+  /** √2 × rms of the travel in the band: changes summed up again, and what averaging over a cell takes given back. */
+  private amplitudeOf(peak: number, high: number): number {
+    const { power, length, cells } = this;
+    let sum = 0;
+    for (let k = Math.ceil(amplitudeFrom * peak); k <= high; k++) {
+      const half = (Math.PI * k) / length;
+      // change of a unit swing is 2 sin(half); the mean over a cell keeps sin(half)/half of it
+      sum += (power[k] as number) / ((2 * Math.sin(half)) ** 2 * (Math.sin(half) / half) ** 2);
+    }
+    return Math.SQRT2 * Math.sqrt((2 * sum) / (length * cells * this.taperPower));
+  }
+
   /**
    * Autocorrelation near one period of the peak, straight from the power spectrum (Wiener–Khinchin): spares the
    * inverse transform where it could not come out high enough.
    */
-  private promising(peak: number, low: number, high: number, band: number, first: number): boolean {
+  private promising(peak: number, low: number, high: number, band: number): boolean {
     const { power, length } = this;
     for (const stretch of [1, 0.94, 1.06]) {
       const turn = (2 * Math.PI * stretch) / peak;
       let sum = 0;
       for (let k = low; k <= high; k++) sum += (power[k] as number) * Math.cos(turn * k);
       const lag = Math.round((stretch * length) / peak);
-      if (sum >= 0.9 * first * (this.overlap[lag] as number) * band) return true;
+      if (sum >= 0.9 * this.rules.first * (this.overlap[lag] as number) * band) return true;
     }
     return false;
   }
 
-  /** Autocorrelation of the band, by lag in cells; 1 at lag 0. */
+  /** Autocorrelation of the band, by lag in cells. */
   private bandCorrelation(low: number, high: number): Float64Array {
-    const { spectrum, power, length } = this;
+    const { spectrum, power, correlation, length } = this;
     spectrum.fill(0);
     for (let k = low; k <= high; k++) {
       spectrum[2 * k] = power[k] as number;
-      spectrum[2 * (length - k)] = power[k] as number;
-    }
-    return this.backwards();
-  }
-
-  private autocorrelation(): Float64Array {
-    this.transform();
-    const { spectrum, power, length } = this;
-    spectrum.fill(0);
-    for (let k = 0; k <= length / 2; k++) {
-      spectrum[2 * k] = power[k] as number;
       if (k > 0 && k < length / 2) spectrum[2 * (length - k)] = power[k] as number;
     }
-    return this.backwards();
-  }
-
-  private backwards(): Float64Array {
-    const { correlation, length } = this;
-    this.fft.inverseTransform(correlation, this.spectrum);
+    this.fft.inverseTransform(correlation, spectrum);
     for (let lag = 0; lag < length; lag++) correlation[lag] = correlation[2 * lag] as number;
     return correlation.subarray(0, length);
   }
@@ -185,27 +238,6 @@ export class BlockSpectrum {
     const value = (1 - t) * (r[below] as number) + t * (r[below + 1] as number);
     return value / (r[0] as number) / (this.overlap[Math.round(lag)] as number);
   }
-}
-
-/** Takes the straight line out of a block in place; returns the rms of what is left. */
-function detrend(block: Float64Array): number {
-  const n = block.length;
-  let sum = 0;
-  let moment = 0;
-  const middle = (n - 1) / 2;
-  for (let i = 0; i < n; i++) {
-    sum += block[i] as number;
-    moment += (block[i] as number) * (i - middle);
-  }
-  const mean = sum / n;
-  const slope = n > 1 ? (12 * moment) / (n * (n * n - 1)) : 0;
-  let squares = 0;
-  for (let i = 0; i < n; i++) {
-    const left = (block[i] as number) - mean - slope * (i - middle);
-    block[i] = left;
-    squares += left * left;
-  }
-  return Math.sqrt(squares / n);
 }
 
 /** Flat window whose ends rise and fall as half a cosine over a share of its length. */

@@ -1,9 +1,8 @@
 import { type Limits } from '../limits.js';
-import { type Prepared } from '../preparation/prepared.js';
+import { type Grid } from '../preparation/prepared.js';
 
-/** How a record is cut for one range of periods, times in s. */
+/** How a column is cut for one octave of periods, times in s. */
 export interface BlockPlan {
-  readonly seconds: number;
   /** grid points averaged into one cell */
   readonly cellPoints: number;
   /** length of a cell, s */
@@ -12,57 +11,56 @@ export interface BlockPlan {
   readonly cells: number;
   /** grid points from the start of a block to the start of the next */
   readonly stride: number;
-  readonly blocks: number;
+  /** blocks that do not overlap */
+  readonly apart: number;
   readonly shortest: number;
   readonly longest: number;
 }
 
-/** The shortest period of a block length reaches well into the range of the next shorter one. */
-const periodRange = 12;
-const cellsPerShortest = 8;
-const mostCells = 8_192;
+/** Cells in the shortest period of an octave. */
+export const cellsPerPeriod = 8;
+/** An octave reaches this much beyond both ends, so that no period falls between two. */
+const slack = 1.08;
 /** Up to this many blocks they overlap by half. */
 const fewBlocks = 24;
 
 /**
- * Block lengths that fit a record, each with the range of periods it is asked about: from
- * `samplesPerCycle` scans to a `blockCycles`th of the block.
+ * The octaves of periods a column can show, each with blocks of `blockCycles` of its longest period; the last is
+ * cut short where the record does not hold `leastBlocks` of them.
  *
- * Blocks of 1, 6 and 24 h see periods up to 2.4 h. A period of 6 h needs ten cycles as well, so blocks of 96 h are
- * added, and in records shorter than three of those one of a third of the record (our choice: the same test of
- * Thornhill, Huang & Zhang 2003 on a longer block, rather than a weaker test on a short one).
+ * The handbook's blocks of 1, 6 and 24 h miss periods of an hour and more, which then have too few cycles in a
+ * block. Blocks that follow the period keep the ten cycles its test needs at every period and every pace.
  *
- * @returns none where the record is too short, or sampled too slowly for the blocks that fit
- * Source: methods.md §6.2
+ * @param range shortest and longest period wanted, s
+ * @returns none where the record is too short
+ * Source: the ten cycles of Thornhill, Huang & Zhang 2003; methods.md §6.2
  */
-export function blockPlans(prepared: Prepared, limits: Limits): BlockPlan[] {
+export function blockPlans(
+  { step, count }: Grid,
+  range: { readonly shortest: number; readonly longest: number },
+  limits: Limits,
+): BlockPlan[] {
   const rules = limits.movement;
-  const record = prepared.count * prepared.step;
-  const scan = Math.max(prepared.spacing.travel, prepared.step);
-  const wanted = rules.blockHours.map((hours) => 3_600 * hours);
-  const fit = wanted.filter((seconds) => seconds * rules.leastBlocks <= record * 1.001);
-  const third = record / rules.leastBlocks;
-  const longest = Math.max(...wanted);
-  if (third < longest && third > 1.5 * (fit.at(-1) ?? 0)) fit.push(third);
-  return fit
-    .map((seconds) => planOf(prepared, limits, seconds, scan))
-    .filter((plan) => plan.longest >= plan.shortest && plan.blocks >= rules.leastBlocks);
-}
-
-function planOf(prepared: Prepared, limits: Limits, seconds: number, scan: number): BlockPlan {
-  const rules = limits.movement;
-  const { step, count } = prepared;
-  const longest = (1.05 * seconds) / rules.blockCycles;
-  const shortest = Math.max(rules.samplesPerCycle * scan, longest / periodRange / 2);
-  const points = Math.floor(seconds / step);
-  const cellPoints = Math.max(
-    1,
-    Math.floor(shortest / cellsPerShortest / step),
-    Math.ceil(points / mostCells),
-  );
-  const cells = Math.floor(points / cellPoints);
-  const apart = Math.floor(count / Math.max(1, points));
-  const stride = apart <= fewBlocks ? Math.max(1, points >> 1) : points;
-  const blocks = count < points ? 0 : Math.floor((count - cells * cellPoints) / stride) + 1;
-  return { seconds, cellPoints, cell: cellPoints * step, cells, stride, blocks, shortest, longest };
+  const held = Math.min(range.longest, (count * step) / (rules.leastBlocks * rules.blockCycles));
+  const plans: BlockPlan[] = [];
+  for (let shortest = range.shortest; shortest < held;) {
+    // below eight points a period the octave ends where there are eight, so that a cell is one point
+    const eight = cellsPerPeriod * step;
+    const longest = Math.min(held, shortest < eight ? Math.max(1.2 * shortest, eight) : 2 * shortest);
+    const cellPoints = Math.max(1, Math.floor(shortest / eight + 1e-6));
+    const cells = Math.floor((rules.blockCycles * longest) / (cellPoints * step) + 1e-6);
+    const points = cells * cellPoints;
+    const apart = Math.floor(count / points);
+    plans.push({
+      cellPoints,
+      cell: cellPoints * step,
+      cells,
+      stride: apart <= fewBlocks ? Math.max(1, points >> 1) : points,
+      apart,
+      shortest: plans.length === 0 ? shortest : shortest / slack,
+      longest: longest * slack,
+    });
+    shortest = longest;
+  }
+  return plans.filter((plan) => plan.apart >= rules.leastBlocks && plan.cells >= 2 * cellsPerPeriod);
 }

@@ -1,24 +1,37 @@
-import { type Prepared } from '../preparation/prepared.js';
+import { median } from '../statistics/quantile.js';
 import { phasorOf } from './phasor.js';
+import { type Column } from './step-free.js';
 
 const day = 86_400;
 /** A day's load is not a sine: its harmonics up to this one can look like an oscillation of hours. */
 const harmonics = 12;
 /** Within this share of a harmonic a period cannot be told from it. */
 const nearness = 0.03;
+/** The day is a line of the spectrum where it stands this far above its neighbours. */
+const lineRatio = 3;
+const neighbours = [-3.5, -2.5, -1.5, 1.5, 2.5, 3.5] as const;
 
 /**
- * True where a period is a fraction of the day and the day itself swings the travel more: the load's daily
- * course, not the loop, is then seen (our choice; a loop that hunts at 6 h does not swing at 24 h or 12 h).
+ * True where a period is a fraction of the day and the day itself swings the travel more, as a line of the
+ * spectrum: the load's daily course, not the loop, is then seen (our choice; a loop that hunts at 6 h does not
+ * swing at 24 h or 12 h).
  *
+ * @param column travel
  * @param period s
  */
-export function isDayCycle(prepared: Prepared, usable: Uint8Array, period: number): boolean {
+export function isDayCycle(column: Column, period: number): boolean {
   const order = Math.round(day / period);
   if (order < 1 || order > harmonics || Math.abs(day / order / period - 1) > nearness) return false;
-  if (prepared.count * prepared.step < 2 * day) return false;
-  const swing = (seconds: number) =>
-    phasorOf(prepared.travel, usable, 0, prepared.count, seconds / prepared.step).amplitude;
-  const own = swing(day / order);
-  return swing(day) > own || (order > 2 && swing(day / 2) > own);
+  const days = (column.count * column.step) / day;
+  if (days < 2) return false;
+  const swing = (cycles: number) =>
+    phasorOf(column.values, null, 0, column.count, column.count / cycles).amplitude;
+  const own = swing(days * order);
+  return [1, 2].some((of) => {
+    if (of >= order) return false;
+    const cycles = of * days;
+    const line = swing(cycles);
+    const around = median(neighbours.map((n) => swing(Math.max(0.5, cycles + n))));
+    return line > own && line > lineRatio * around;
+  });
 }

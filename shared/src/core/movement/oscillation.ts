@@ -4,32 +4,27 @@ import { type Prepared } from '../preparation/prepared.js';
 import { cannotJudge, type CannotJudge } from '../reasons.js';
 import { median } from '../statistics/quantile.js';
 import { BlockSpectrum } from './block-spectrum.js';
-import { type BlockPlan, blockPlans } from './blocks.js';
+import { type BlockPlan, blockPlans, cellsPerPeriod } from './blocks.js';
 import { isDayCycle } from './day-cycle.js';
+import { cellsOf, type Column, stepFree } from './step-free.js';
+import { type OscillatingBlock } from './oscillating-block.js';
 import { whoseOscillation } from './whose-oscillation.js';
 
-/** A block in which the travel oscillates: grid points from…to, period in s. */
-export interface OscillatingBlock {
-  readonly from: number;
-  readonly to: number;
-  readonly period: number;
-  readonly regularity: number;
-  readonly amplitude: number;
-}
-
 interface Found {
-  readonly plan: BlockPlan;
-  readonly judged: number;
   readonly blocks: readonly OscillatingBlock[];
+  readonly judged: number;
   readonly share: number;
+  readonly blockSeconds: number;
+  /** s per point of the blocks' from and to */
+  readonly step: number;
 }
 
 /**
  * Hunting: does the travel swing with one period, in how much of the time, how far, and whose swing is it?
  *
- * Each block length is judged by itself; only blocks whose periods agree within `oscillationSpread` count as one
- * oscillation, since noise passed through a band swings too, but with another period each time (our addition).
- * The block length with the largest share speaks.
+ * Each octave of periods is judged by itself; only blocks whose periods agree within `oscillationSpread` count as
+ * one oscillation, since noise passed through a band swings too, but with another period each time (our addition).
+ * The octave with the largest share speaks. From `stepFreeCell`s on, periods are sought in the travel freed of steps.
  *
  * @param usable 1 where the valve was in service and not held by hand
  * @param sticking whether the stem jumps (§6.4): then the valve is the cause
@@ -42,75 +37,91 @@ export function oscillationOf(
   sticking: boolean,
   limits: Limits,
 ): Oscillation | CannotJudge | null {
-  const plans = blockPlans(prepared, limits);
-  if (plans.length === 0) return refusal(prepared, limits);
+  const rules = limits.movement;
+  const scan = Math.max(prepared.spacing.travel, prepared.step);
+  const shortest = rules.samplesPerCycle * scan;
+  const cell = Math.max(rules.stepFreeCell, 2 * scan);
+  const change = Math.max(shortest, 2 * cellsPerPeriod * cell);
+  const whole: Column = { ...prepared, values: prepared.travel, usable };
+  const freed = stepFree(whole, cell, rules.stepClip);
+  const looked = [
+    { column: whole, plans: blockPlans(whole, { shortest, longest: change }, limits) },
+    { column: freed, plans: blockPlans(freed, { shortest: change, longest: rules.longestPeriod }, limits) },
+  ];
+  if (looked.every(({ plans }) => plans.length === 0)) return refusal(prepared, scan, limits);
   let best: Found | null = null;
   let judged = 0;
-  for (const plan of plans) {
-    const found = lookThrough(prepared, usable, plan, limits);
-    if (found === null) continue;
-    judged++;
-    if (found.blocks.length === 0 || (best !== null && found.share <= best.share)) continue;
-    if (isDayCycle(prepared, usable, median(found.blocks.map((b) => b.period)))) continue;
-    best = found;
+  for (const { column, plans } of looked) {
+    for (const plan of plans) {
+      const found = lookThrough(column, plan, limits);
+      if (found === null) continue;
+      judged++;
+      if (found.blocks.length === 0 || found.share <= (best?.share ?? 0)) continue;
+      if (!isDayCycle(freed, median(found.blocks.map((b) => b.period)))) best = found;
+    }
   }
   if (judged === 0) return cannotJudge('valve-not-in-service');
-  if (best === null) return null;
-  const of = (name: 'period' | 'regularity' | 'amplitude') => median(best.blocks.map((b) => b[name]));
+  return best === null ? null : describe(prepared, best, sticking, limits);
+}
+
+function describe(prepared: Prepared, found: Found, sticking: boolean, limits: Limits): Oscillation {
+  const of = (name: 'period' | 'regularity' | 'amplitude') => median(found.blocks.map((b) => b[name]));
+  const points = found.step / prepared.step;
+  const blocks = found.blocks.map((b) => ({
+    ...b,
+    from: Math.round(b.from * points),
+    to: Math.min(prepared.count, Math.round(b.to * points)),
+  }));
   return {
     period: of('period'),
     regularity: of('regularity'),
     amplitude: of('amplitude'),
-    share: best.share,
-    blocks: best.judged,
-    blockHours: best.plan.seconds / 3_600,
-    cause: whoseOscillation(prepared, best.blocks, sticking, limits),
+    share: found.share,
+    blocks: found.judged,
+    blockHours: found.blockSeconds / 3_600,
+    cause: whoseOscillation(prepared, blocks, sticking, limits),
   };
 }
 
-function refusal(prepared: Prepared, limits: Limits): CannotJudge {
+function refusal(prepared: Prepared, scan: number, limits: Limits): CannotJudge {
   const rules = limits.movement;
-  const scan = Math.max(prepared.spacing.travel, prepared.step);
-  const seconds = prepared.count * prepared.step;
   const neededSeconds = rules.leastBlocks * rules.blockCycles * rules.samplesPerCycle * scan;
-  return seconds < neededSeconds
-    ? cannotJudge('record-too-short', { seconds, neededSeconds })
-    : cannotJudge('sampled-too-slowly', { spacing: scan });
+  return cannotJudge('record-too-short', { seconds: prepared.count * prepared.step, neededSeconds });
 }
 
-/** Every block of one length; null where fewer than the least were complete. */
-function lookThrough(prepared: Prepared, usable: Uint8Array, plan: BlockPlan, limits: Limits): Found | null {
+/** Every block of one octave; null where fewer than the least were complete. */
+function lookThrough(column: Column, plan: BlockPlan, limits: Limits): Found | null {
   const rules = limits.movement;
-  const spectrum = new BlockSpectrum(plan.cells);
-  const block = new Float64Array(plan.cells);
-  const asked = {
+  const spectrum = new BlockSpectrum(plan.cells, {
     shortest: plan.shortest / plan.cell,
     longest: plan.longest / plan.cell,
     amplitude: rules.oscillationAmplitude,
     regularity: rules.regularity,
     first: rules.oscillationFirst,
     third: rules.oscillationThird,
-  };
+    clip: rules.stepClip,
+  });
+  const block = new Float64Array(plan.cells);
   const oscillating: OscillatingBlock[] = [];
+  const points = plan.cells * plan.cellPoints;
   let judged = 0;
-  for (let b = 0; b < plan.blocks; b++) {
-    const from = b * plan.stride;
-    if (!cellsOf(prepared.travel, usable, from, plan, rules.blockCoverage, block)) continue;
+  for (let from = 0; from + points <= column.count; from += plan.stride) {
+    if (!cellsOf(column, from, plan.cellPoints, rules.blockCoverage, block)) continue;
     judged++;
-    const found = spectrum.find(block, asked);
-    if (found === null) continue;
-    oscillating.push({
-      from,
-      to: from + plan.cells * plan.cellPoints,
-      period: found.period * plan.cell,
-      regularity: found.regularity,
-      amplitude: found.amplitude,
-    });
+    const found = spectrum.find(block);
+    if (found !== null)
+      oscillating.push({ ...found, from, to: from + points, period: found.period * plan.cell });
   }
-  const apart = Math.max(1, Math.round((plan.cells * plan.cellPoints) / plan.stride));
-  if (judged < rules.leastBlocks + (rules.leastBlocks - 1) * (apart - 1)) return null;
-  const together = samePeriod(oscillating, rules.oscillationSpread);
-  return { plan, judged, blocks: together, share: together.length / judged };
+  // overlapping blocks count by what they cover
+  if (judged * plan.stride + points - plan.stride < rules.leastBlocks * points) return null;
+  const blocks = samePeriod(oscillating, rules.oscillationSpread);
+  return {
+    blocks,
+    judged,
+    share: blocks.length / judged,
+    blockSeconds: plan.cells * plan.cell,
+    step: column.step,
+  };
 }
 
 /** The largest group of blocks whose periods lie within the ratio of each other. */
@@ -119,59 +130,12 @@ function samePeriod(blocks: readonly OscillatingBlock[], ratio: number): Oscilla
   let best = 0;
   let bestFrom = 0;
   for (let from = 0, to = 0; from < sorted.length; from++) {
-    while (
-      to < sorted.length &&
-      (sorted[to] as OscillatingBlock).period <= ratio * (sorted[from] as OscillatingBlock).period
-    )
-      to++;
+    const longest = ratio * (sorted[from] as OscillatingBlock).period;
+    while (to < sorted.length && (sorted[to] as OscillatingBlock).period <= longest) to++;
     if (to - from > best) {
       best = to - from;
       bestFrom = from;
     }
   }
   return sorted.slice(bestFrom, bestFrom + best);
-}
-
-/** Means of the usable points of each cell, gaps bridged by straight lines; false where too much is missing. */
-function cellsOf(
-  travel: Float64Array,
-  usable: Uint8Array,
-  from: number,
-  plan: BlockPlan,
-  coverage: number,
-  block: Float64Array,
-): boolean {
-  const { cells, cellPoints } = plan;
-  const fewest = coverage * cells;
-  let known = 0;
-  let last = -1;
-  let i = from;
-  for (let c = 0; c < cells; c++) {
-    let sum = 0;
-    let n = 0;
-    for (const end = i + cellPoints; i < end; i++) {
-      const v = travel[i] as number;
-      if (usable[i] !== 1 || Number.isNaN(v)) continue;
-      sum += v;
-      n++;
-    }
-    if (n === 0) {
-      if (c + 1 - known > cells - fewest) return false;
-      continue;
-    }
-    const value = sum / n;
-    bridge(block, last, c, value);
-    block[c] = value;
-    last = c;
-    known++;
-  }
-  if (last < 0) return false;
-  bridge(block, last, cells, block[last] as number);
-  return known >= fewest;
-}
-
-/** Fills the cells between `last` (−1: before the first known) and `next` on a straight line to `value`. */
-function bridge(block: Float64Array, last: number, next: number, value: number): void {
-  const start = last < 0 ? value : (block[last] as number);
-  for (let c = last + 1; c < next; c++) block[c] = start + ((value - start) * (c - last)) / (next - last);
 }

@@ -1,8 +1,12 @@
 import { type Oscillation } from '../assessment.js';
 import { type Limits } from '../limits.js';
 import { type Prepared, valveState } from '../preparation/prepared.js';
-import { type OscillatingBlock } from './oscillation.js';
+import { median } from '../statistics/quantile.js';
+import { BlockSpectrum } from './block-spectrum.js';
+import { cellsPerPeriod } from './blocks.js';
+import { type OscillatingBlock } from './oscillating-block.js';
 import { phasorOf } from './phasor.js';
+import { cellsOf } from './step-free.js';
 
 /** Blocks looked at: the first ones, spread over the record. */
 const looks = 40;
@@ -33,7 +37,7 @@ export function whoseOscillation(
 ): Oscillation['cause'] {
   const stride = Math.ceil(blocks.length / looks);
   const looked = blocks.filter((_, i) => i % stride === 0);
-  if (agree(looked, (b) => fromSetPoint(prepared, b, limits.movement.setPointShare))) return 'outside';
+  if (fromSetPoint(prepared, looked, limits)) return 'outside';
   if (agree(looked, (b) => fromLine(prepared, b))) return 'line';
   if (sticking) return 'valve';
   return restsInManual(prepared, blocks) ? 'loop' : 'not decided';
@@ -43,13 +47,38 @@ function agree(blocks: readonly OscillatingBlock[], holds: (block: OscillatingBl
   return blocks.length > 0 && blocks.filter(holds).length > most * blocks.length;
 }
 
-function fromSetPoint(prepared: Prepared, block: OscillatingBlock, share: number): boolean {
+/**
+ * The set point passes the same test at the same period, and swings at least `setPointShare` as far as the process
+ * value. Its amplitude alone would not do: set-point steps at random have some at every period.
+ */
+function fromSetPoint(prepared: Prepared, blocks: readonly OscillatingBlock[], limits: Limits): boolean {
   const { setPoint, processValue, step } = prepared;
-  if (setPoint === null || processValue === null) return false;
-  const period = block.period / step;
-  const asked = phasorOf(setPoint, null, block.from, block.to, period).amplitude;
-  const got = phasorOf(processValue, null, block.from, block.to, period).amplitude;
-  return asked > 0 && asked >= share * got;
+  if (setPoint === null || processValue === null || blocks.length === 0) return false;
+  const rules = limits.movement;
+  const period = median(blocks.map((b) => b.period));
+  const cellPoints = Math.max(1, Math.floor(period / cellsPerPeriod / step));
+  const cell = cellPoints * step;
+  const points = Math.min(...blocks.map((b) => b.to - b.from));
+  const block = new Float64Array(Math.floor(points / cellPoints));
+  const spectrum = new BlockSpectrum(block.length, {
+    shortest: period / rules.oscillationSpread / cell,
+    longest: (period * rules.oscillationSpread) / cell,
+    amplitude: 0,
+    regularity: rules.regularity,
+    first: rules.oscillationFirst,
+    third: rules.oscillationThird,
+    clip: rules.stepClip,
+  });
+  const swings = (values: Float64Array, from: number) =>
+    cellsOf({ ...prepared, values, usable: null }, from, cellPoints, rules.blockCoverage, block)
+      ? spectrum.find(block)
+      : null;
+  return agree(blocks, ({ from, to }) => {
+    const asked = swings(setPoint, from);
+    if (asked === null) return false;
+    const got = phasorOf(processValue, null, from, to, asked.period * cellPoints).amplitude;
+    return asked.amplitude >= rules.setPointShare * got;
+  });
 }
 
 function fromLine(prepared: Prepared, block: OscillatingBlock): boolean {

@@ -1,0 +1,33 @@
+import { type FindingRule } from './finding-rule.js';
+
+/** The stem rests while demand moves, then jumps (§6.4, §9.2). */
+export const sticking: FindingRule = {
+  kind: 'Sticking',
+  weight: 1,
+  explains: ['Hunting'],
+  measure({ movement, resolution }, _sheet, limits) {
+    if (movement === null) return [];
+    const { demandToPosition: split, jumps } = movement;
+    if ('reason' in split) return split;
+    if ('reason' in jumps) return jumps;
+    const rules = limits.movement;
+    return [
+      {
+        ...limits.findings.kinds.Sticking,
+        x: split.deadBand,
+        rule: 'jumps',
+        standardError: split.standardError,
+        holds: jumps.share >= rules.jumpShare && jumps.median >= rules.jumpMedian,
+        severityFactor: 1,
+        rests: { onPosition: true, onPressures: false },
+        evidence: {
+          jump: jumps.median,
+          jumpShare: jumps.share,
+          jumps: jumps.count,
+          bins: split.bins,
+          resolution: resolution.travel,
+        },
+      },
+    ];
+  },
+};
