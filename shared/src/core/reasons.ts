@@ -10,6 +10,7 @@ export const reasonCodes = [
   'no-rated-coefficient',
   'no-characteristic-specified',
   'no-fluid-data',
+  'no-recovery-factor',
   'signal-quality',
   'record-too-short',
   'too-few-windows',

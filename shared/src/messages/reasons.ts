@@ -20,6 +20,8 @@ const sentences: Record<ReasonCode, (f: Figures) => string> = {
     'The data sheet names no characteristic. Enter it to compare the shape with it.',
   'no-fluid-data': () =>
     'The data sheet lacks the fluid’s properties. A liquid needs its density; a gas needs molar mass or density, temperature and specific heat ratio.',
+  'no-recovery-factor': () =>
+    'The data sheet gives no pressure recovery factor (FL for a liquid, xT for a gas). Enter the maker’s.',
   'signal-quality': (f) =>
     `${has(f, 'share') ? share(fig(f, 'share')) : 'Too much'} of the in-service time was rejected as bad or out of range${has(f, 'allowed') ? `; ${share(fig(f, 'allowed'))} is the most that can be judged` : ''}. Check the transmitter and its export.`,
   'record-too-short': (f) =>
