@@ -22,6 +22,8 @@ import { operatingRange } from './range/operating-range.js';
 import { cannotJudge, type CannotJudge } from './reasons.js';
 import { type History, type Span } from './series.js';
 import { seededRandom, seedFrom } from './statistics/seeded-random.js';
+import { serviceStress } from './stress/service-stress.js';
+import { serviceStress } from './stress/service-stress.js';
 import { unassessed } from './unassessed.js';
 
 /**
@@ -79,7 +81,7 @@ export function assess(
     movement,
     drift: null,
     passing: null,
-    service: null,
+    service: serviceStress(prepared, windows, sheet, limits),
     warnings: prepared.warnings,
   };
   const found = find(chapters, sheet, limits);

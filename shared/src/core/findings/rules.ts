@@ -1,3 +1,4 @@
+import { chokedService } from './choked-service.js';
 import { excessMovement } from './excess-movement.js';
 import { type FindingRule } from './finding-rule.js';
 import { frozenSignal } from './frozen-signal.js';
@@ -17,7 +18,7 @@ import { undersized } from './undersized.js';
 import { unevenGain } from './uneven-gain.js';
 
 /** Every kind's rule: leave one out and it does not compile. */
-export const findingRules: Partial<Record<FindingKind, FindingRule>> = {
+export const findingRules: Record<FindingKind, FindingRule> = {
   Oversized: oversized,
   Undersized: undersized,
   'Pinned at limit': pinnedAtLimit,
@@ -32,5 +33,6 @@ export const findingRules: Partial<Record<FindingKind, FindingRule>> = {
   'Excess movement': excessMovement,
   'Position mismatch': positionMismatch,
   'Uneven gain': unevenGain,
+  'Choked service': chokedService,
   'Frozen signal': frozenSignal,
 };
