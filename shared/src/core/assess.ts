@@ -23,7 +23,6 @@ import { cannotJudge, type CannotJudge } from './reasons.js';
 import { type History, type Span } from './series.js';
 import { seededRandom, seedFrom } from './statistics/seeded-random.js';
 import { serviceStress } from './stress/service-stress.js';
-import { serviceStress } from './stress/service-stress.js';
 import { unassessed } from './unassessed.js';
 
 /**

@@ -25,7 +25,7 @@ export function attentionOf(findings: readonly Finding[], sheet: DataSheet): Att
     .filter((f) => f.explainedBy === null)
     .map(({ kind, severity, confidence }) => ({
       kind,
-      weight: findingRules[kind]?.weight ?? 0,
+      weight: findingRules[kind].weight,
       severity,
       confidence,
     }));

@@ -24,7 +24,7 @@ export function withConsequences(findings: readonly Finding[]): Finding[] {
   const raised = new Map(findings.map((f) => [f.kind, f]));
   const primary = new Map<FindingKind, FindingKind>();
   for (const finding of findings) {
-    for (const kind of findingRules[finding.kind]?.explains ?? []) {
+    for (const kind of findingRules[finding.kind].explains) {
       const explained = raised.get(kind);
       if (explained === undefined || primary.has(kind)) continue;
       if (onlyWhere[finding.kind]?.(explained) ?? true) primary.set(kind, finding.kind);

@@ -35,7 +35,6 @@ export function find(chapters: Chapters, sheet: DataSheet, limits: Limits): Foun
   const figures: KindFigure[] = [];
   for (const kind of findingKinds) {
     const rule = findingRules[kind];
-    if (rule === undefined) continue;
     if (sheet.trip && advice.has(kind)) {
       notJudged.push({ kind, reason: 'trip-valve', figures: {} });
       continue;
