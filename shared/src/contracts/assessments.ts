@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { characteristicKinds } from '../core/data-sheet.js';
 import { assessedFinding, findingKind } from './findings.js';
+import { pageOf } from './paging.js';
 import { instant, interval } from './text.js';
 
 /** An assessment as it is printed, stored and answered: the core's result in the register's units and in words. */
@@ -198,3 +199,14 @@ export const storedAssessment = z.object({
   result: presentedAssessment,
 });
 export type StoredAssessment = z.infer<typeof storedAssessment>;
+
+/** One line of a valve's assessments. */
+export const assessmentRow = z.object({
+  id: z.uuid(),
+  runNumber: z.number().int(),
+  assessedAt: instant,
+  judged: z.boolean(),
+  attention: z.number().nullable(),
+});
+export const assessmentPage = pageOf(assessmentRow);
+export type AssessmentPage = z.infer<typeof assessmentPage>;

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { findingKinds } from '../core/findings/kinds.js';
+import { pageOf } from './paging.js';
 import { instant } from './text.js';
 
 export const findingKind = z.enum(findingKinds);
@@ -41,3 +42,5 @@ export const finding = z.object({
   lastSeen: instant,
 });
 export type LivingFinding = z.infer<typeof finding>;
+export const findingPage = pageOf(finding);
+export type FindingPage = z.infer<typeof findingPage>;

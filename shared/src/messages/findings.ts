@@ -18,7 +18,7 @@ const give = (finding: Finding, name: string, words: (value: number) => string):
   known(finding, name) ? words(evidence(finding, name)) : '';
 
 const capacity = (direction: 'less' | 'more') => (finding: Finding) => {
-  const change = capacityChange(finding.x);
+  const change = capacityChange(direction === 'less' ? -finding.x : finding.x);
   if (finding.rule === 'sheet') return `passes ${change} ${direction} than the data sheet at the same travel`;
   if (finding.rule === 'step') return `passes ${change} ${direction} since a step within the record`;
   return `passes ${change} ${direction} than in its reference period`;

@@ -15,14 +15,16 @@ const byKind: Record<ProblemKind, string> = {
   'unusable-file': 'Mend the file and bring it in again; nothing of it was kept.',
   'upload-cut': 'The connection ended before the file was whole. Nothing was kept; send it again.',
   'too-many-requests': 'Wait a little and try again.',
-  unexpected: 'This is a fault of the service. It is in the log under the number given; tell your site administrator.',
+  unexpected:
+    'This is a fault of the service. It is in the log under the number given; tell your site administrator.',
   'not-ready': 'Try again in a moment.',
 };
 
 /** Finer sentences, where the kind's own would not say how to mend it. */
 const details = {
   'tag-taken': 'A valve with this tag is in the register already. Use another tag, or open that valve.',
-  'signal-bound': 'This valve already has another tag for this role. An engineer can change it on the valve’s page.',
+  'signal-bound':
+    'This valve already has another tag for this role. An engineer can change it on the valve’s page.',
   'no-such-route': 'There is no such address in the API. The list of them is at /api/docs.',
   'body-not-json': 'The body is not valid JSON.',
   'body-too-large': 'The body is larger than the 1 MB allowed here. Files go to /api/trends.',
