@@ -138,7 +138,7 @@ export const presentedAssessment = z.object({
     .nullable(),
   drift: z
     .object({
-      by: z.enum(['month', 'week']),
+      by: z.enum(['month', 'week', 'day', 'hour', 'minute']),
       reference: z.object({ from: instant, to: instant }),
       series: z.array(
         z.object({ at: instant, change: z.number(), low: z.number(), high: z.number(), windows: z.number() }),

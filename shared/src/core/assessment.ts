@@ -211,7 +211,8 @@ export interface Movement {
 }
 
 export interface Drift {
-  readonly by: 'month' | 'week';
+  /** what the series is cut into; `minute`: a thirtieth of a record of hours */
+  readonly by: 'month' | 'week' | 'day' | 'hour' | 'minute';
   readonly reference: ReferenceSpan;
   /** ln capacity against the reference period */
   readonly series: readonly {

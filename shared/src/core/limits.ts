@@ -194,11 +194,19 @@ export const defaultLimits = {
     /** §7.2 */
     significance: 0.01,
     change: 0.03,
+    /** the same where the record has no ten weeks */
+    shortChange: 0.05,
     changeSpreads: 3,
     /** §7.3 */
     stepPenalty: 3,
     stepSpreads: 3,
+    /** standard errors a step must stand out by, neighbours counted as they resemble each other */
+    stepErrors: 4,
+    /** the same in records of less than days, where nothing is raised on it */
+    shortStepErrors: 3,
     stepSegments: 3,
+    /** more levels than this are a wobble followed, not steps */
+    mostLevels: 3,
     mostPoints: 400,
     /** §4.4 */
     endSeconds: 600,
