@@ -16,7 +16,7 @@ const onlyWhere: Partial<Record<FindingKind, (explained: Finding) => boolean>> =
 /**
  * Marks findings that another one explains: they are shown struck through and not counted.
  *
- * A finding that is itself explained explains nothing, so that no chain leaves a valve without a cause.
+ * Explanations may chain (Sticking → Hunting → Excess movement); the first of the chain is counted.
  *
  * Source: methods.md §9.1
  */
@@ -32,6 +32,6 @@ export function withConsequences(findings: readonly Finding[]): Finding[] {
   }
   return findings.map((finding) => {
     const by = primary.get(finding.kind);
-    return by === undefined || primary.has(by) ? finding : { ...finding, explainedBy: by };
+    return by === undefined ? finding : { ...finding, explainedBy: by };
   });
 }
