@@ -100,7 +100,7 @@ describe('the effective characteristic', () => {
   it('needs a dead band or 40 % of travel before it names a kind from demand alone', () => {
     const demandOnly = (record: History): History => {
       const { demand, flow, upstreamPressure, downstreamPressure } = record;
-      return { demand, flow, upstreamPressure, downstreamPressure } as History;
+      return { demand, flow, upstreamPressure, downstreamPressure };
     };
     expect(fitOf({ from: 40, to: 70 }, aSheet(), demandOnly).characteristic?.undecided?.reason).toBe(
       'demand-only',
