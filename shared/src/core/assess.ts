@@ -9,6 +9,8 @@ import { compareWithSheet } from './characteristic/compare-with-sheet.js';
 import { endReadings } from './characteristic/end-readings.js';
 import { type CharacteristicFit, fitCharacteristic } from './characteristic/fit-characteristic.js';
 import { type ValveRecord } from './data-sheet.js';
+import { driftOf } from './drift/drift.js';
+import { passingOf } from './drift/passing.js';
 import { attentionOf } from './findings/attention.js';
 import { find } from './findings/find.js';
 import { type Chapters } from './findings/finding-rule.js';
@@ -62,6 +64,8 @@ export function assess(
   const gain =
     characteristic === null ? null : installedGain(prepared, windows, range, characteristic, random, limits);
 
+  const drift = driftOf(windows, sheet, limits);
+
   const chapters: Chapters = {
     tag: valve.tag,
     methodVersion,
@@ -78,8 +82,8 @@ export function assess(
     endReadings: endReadings(prepared, limits),
     frozen: prepared.frozen,
     movement,
-    drift: null,
-    passing: null,
+    drift: 'series' in drift ? drift : null,
+    passing: passingOf(prepared, sheet, limits),
     service: serviceStress(prepared, windows, sheet, limits),
     warnings: prepared.warnings,
   };

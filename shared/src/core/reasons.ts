@@ -5,6 +5,7 @@
 export const reasonCodes = [
   'no-samples',
   'no-travel-signal',
+  'no-demand',
   'no-flow',
   'no-pressures',
   'no-rated-coefficient',

@@ -11,6 +11,8 @@ const sentences: Record<ReasonCode, (f: Figures) => string> = {
   'no-samples': () => 'There are no samples in this window. Bring in a trend file that covers it.',
   'no-travel-signal': () =>
     'Neither position nor demand is recorded. Bind one of the two to a historian tag and bring its trend in.',
+  'no-demand': () =>
+    'The demand is not recorded. Bind the controller output to its historian tag and bring its trend in.',
   'no-flow': () => 'No flow is recorded for this valve. Bind a flow tag and bring its trend in.',
   'no-pressures': () =>
     'No pressure drop is known. Record the pressures on both sides, or give two design cases with their pressures.',

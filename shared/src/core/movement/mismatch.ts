@@ -26,7 +26,7 @@ export function mismatch(prepared: Prepared, usable: Uint8Array, limits: Limits)
   const rules = limits.movement;
   const { position: x, demand: u, step, count } = prepared;
   if (x === null) return cannotJudge('demand-only');
-  if (u === null) return cannotJudge('no-travel-signal');
+  if (u === null) return cannotJudge('no-demand');
   const back = Math.max(1, Math.round(rules.slowSeconds / step));
   const stride = Math.max(1, Math.ceil(count / looks));
   const room = Math.ceil(count / stride);

@@ -81,7 +81,7 @@ function directionSplits(
   const positionLegs = legsOf(position);
   const split = (reference: Float64Array, legs: Legs, y: Float64Array): DirectionSplit | CannotJudge =>
     directionSplit({ reference, response: y, legs }, prepared, limits, buffers);
-  const noDemand = cannotJudge('no-travel-signal');
+  const noDemand = cannotJudge('no-demand');
   const noPosition = cannotJudge('demand-only');
   const noFlow = cannotJudge('no-flow');
   return {

@@ -22,7 +22,7 @@ export function restJumpRest(prepared: Prepared, usable: Uint8Array, limits: Lim
   const rules = limits.movement;
   const { position: x, demand: u, step } = prepared;
   if (x === null) return cannotJudge('demand-only');
-  if (u === null) return cannotJudge('no-travel-signal');
+  if (u === null) return cannotJudge('no-demand');
   const spacing = Math.max(prepared.spacing.travel, prepared.spacing.demand ?? 0, step);
   if (spacing > rules.jumpScan * 1.01)
     return cannotJudge('sampled-too-slowly', { spacing, needed: rules.jumpScan });
