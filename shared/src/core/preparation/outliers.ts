@@ -13,8 +13,7 @@ export interface OutlierRules {
 
 /** What the filter did. */
 export interface Outliers {
-  /** the samples without the outliers, so that their neighbours are joined; the argument's where nothing was removed */
-  readonly time: Float64Array;
+  /** the values with outliers bridged by a straight line; the argument's where nothing was removed */
   readonly value: Float64Array;
   readonly removed: number;
   /** true where more than the allowed share would have gone, so that nothing was removed */
@@ -47,7 +46,7 @@ export function removeOutliers(
   const n = value.length;
   const least = Math.max(noticeable * usualBend(value), resolution);
   const K = rules.halfWidth;
-  const allowed = rules.share * n;
+  const allowed = Math.max(1, rules.share * n);
   const window = new Float64Array(2 * K + 1);
   const outliers: number[] = [];
   for (let i = 1; i + 1 < n; i++) {
@@ -56,28 +55,24 @@ export function removeOutliers(
     // NaN among the three compares false: a sample beside a mark is left alone
     if (!(bend > least) || protectedAt?.[i] === 1) continue;
     if (isOutlier(value, i, window, rules.spread, 2 * resolution)) outliers.push(i);
-    if (outliers.length > allowed) return { time, value, removed: 0, off: true };
+    if (outliers.length > allowed) return { value, removed: 0, off: true };
   }
-  if (outliers.length === 0) return { time, value, removed: 0, off: false };
-  return {
-    time: without(time, outliers),
-    value: without(value, outliers),
-    removed: outliers.length,
-    off: false,
-  };
+  if (outliers.length === 0) return { value, removed: 0, off: false };
+  return { value: bridged(time, value, outliers), removed: outliers.length, off: false };
 }
 
-/** A copy without the entries at ascending indices. */
-function without(column: Float64Array, indices: readonly number[]): Float64Array {
-  const kept = new Float64Array(column.length - indices.length);
-  let from = 0;
-  let at = 0;
-  for (const i of [...indices, column.length]) {
-    kept.set(column.subarray(from, i), at);
-    at += i - from;
-    from = i + 1;
-  }
-  return kept;
+/** A copy with the samples at ascending indices put on the line between those that stay. */
+function bridged(time: Float64Array, value: Float64Array, indices: readonly number[]): Float64Array {
+  const copy = value.slice();
+  indices.forEach((i, k) => {
+    let last = k;
+    while (indices[last + 1] === (indices[last] as number) + 1) last++;
+    const next = (indices[last] as number) + 1;
+    const [t0, t1] = [time[i - 1] as number, time[next] as number];
+    const [v0, v1] = [copy[i - 1] as number, value[next] as number];
+    copy[i] = v0 + ((v1 - v0) * ((time[i] as number) - t0)) / (t1 - t0);
+  });
+  return copy;
 }
 
 function isOutlier(value: Float64Array, i: number, window: Float64Array, spread: number, least: number) {

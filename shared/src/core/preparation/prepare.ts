@@ -151,8 +151,11 @@ function rebuildAll({ signals, flowSpan }: RecordedSignals, grid: Grid, limits: 
 function spanOf(role: SignalRole, signal: RecordedSignal, flowSpan: number): number {
   if (role === 'demand' || role === 'position') return 100;
   if (role === 'flow') return flowSpan;
+  // only the scale of it matters here
+  const stride = Math.max(1, Math.floor(signal.value.length / 5_000));
   let largest = 0;
-  for (const v of signal.value) if (Math.abs(v) > largest) largest = Math.abs(v);
+  for (let i = 0; i < signal.value.length; i += stride)
+    largest = Math.max(largest, Math.abs(signal.value[i] as number) || 0);
   return largest;
 }
 

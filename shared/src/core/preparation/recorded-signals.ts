@@ -75,7 +75,7 @@ export function recordedSignals(
       continue;
     }
     const resolution = resolutionOf(clean.value);
-    let { time, value } = clean;
+    let { value } = clean;
     let outliers = 0;
     if (filtered.includes(role)) {
       const near = changes === null ? null : nearAny(clean.time, changes, 3);
@@ -85,12 +85,12 @@ export function recordedSignals(
         { halfWidth: rules.hampelHalfWidth, spread: rules.hampelSpread, share: rules.hampelShare },
         near,
       );
-      ({ time, value, removed: outliers } = result);
+      ({ value, removed: outliers } = result);
       count('outlier', outliers);
       if (result.off) warnings.push({ code: `${role}-outliers-kept`, figures: {} });
     }
     used += clean.time.length - clean.bad - clean.outOfRange - outliers;
-    signals[role] = { ...clean, time, value, pace, gap, resolution, outliers };
+    signals[role] = { ...clean, value, pace, gap, resolution, outliers };
   }
   return { signals, flowSpan, seen, used, leftOut, warnings };
 }
