@@ -2,6 +2,9 @@ import { type DataSheet } from '../data-sheet.js';
 import { pchip } from '../statistics/pchip.js';
 import { relativeCoefficient } from './models.js';
 
+/** What a sheet, or a candidate trim, says of a characteristic. */
+type SpecifiedTrim = Pick<DataSheet, 'characteristic' | 'ratedCoefficient' | 'rangeability' | 'table'>;
+
 /**
  * Relative flow coefficient against relative travel as the data sheet specifies it.
  *
@@ -11,7 +14,7 @@ import { relativeCoefficient } from './models.js';
  * @returns null where the sheet gives no characteristic, or a table without two positive rows
  * Source: methods.md §3
  */
-export function specifiedCurve(sheet: DataSheet): ((h: number) => number) | null {
+export function specifiedCurve(sheet: SpecifiedTrim): ((h: number) => number) | null {
   if (sheet.characteristic === null) return null;
   if (sheet.characteristic === 'table') return tableCurve(sheet);
   const kind = sheet.characteristic;
@@ -21,7 +24,7 @@ export function specifiedCurve(sheet: DataSheet): ((h: number) => number) | null
   return (h) => relativeCoefficient(kind, h, parameter);
 }
 
-function tableCurve(sheet: DataSheet): ((h: number) => number) | null {
+function tableCurve(sheet: SpecifiedTrim): ((h: number) => number) | null {
   const rows = (sheet.table ?? [])
     .filter((row) => Number.isFinite(row.travel) && row.coefficient >= 0)
     .sort((a, b) => a.travel - b.travel)
