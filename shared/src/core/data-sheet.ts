@@ -67,6 +67,8 @@ export interface DataSheet {
   /** % travel the valve was specified to work in */
   readonly designBand: { readonly low: number; readonly high: number } | null;
   readonly flowBasis: FlowBasis;
+  /** the flow is recorded in % or without a unit: no flow coefficient can be made from it */
+  readonly flowUnscaled?: boolean;
   /** full scale of the flow measurement, in the unit of the flow basis */
   readonly flowSpan: number | null;
   readonly designCases: readonly DesignCase[];

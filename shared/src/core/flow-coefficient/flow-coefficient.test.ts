@@ -239,6 +239,7 @@ describe('flowCoefficient', () => {
     for (const over of bad)
       expect(flowCoefficient({ ...conditions, ...over }, aSheet()).coefficient).toBeNaN();
     expect(flowCoefficient(conditions, aSheet({ fluid: null })).coefficient).toBeNaN();
+    expect(flowCoefficient(conditions, aSheet({ flowUnscaled: true })).coefficient).toBeNaN();
     expect(flowCoefficient(conditions, aSheet({ flowBasis: 'normal volume' })).coefficient).toBeNaN();
     const gas = aSheet({ fluid: { ...emptyFluid, phase: 'gas' }, flowBasis: 'mass' });
     expect(flowCoefficient({ ...conditions, density: null }, gas).coefficient).toBeNaN();

@@ -13,7 +13,7 @@ import { liquidCoefficient } from './liquid.js';
  * `gasCoefficient`.
  *
  * @param chokedFrom share of the choked drop from which a window counts as choked; 0.95 by methods.md §2.1
- * @returns coefficient NaN where the fluid is unknown, flow is negative, or P1 is not above P2 (absolute, not negative)
+ * @returns coefficient NaN where the fluid is unknown, flow has no unit or is negative, or P1 is not above P2 (absolute, not negative)
  * Source: IEC 60534-2-1:2011 (ANSI/ISA-75.01.01); methods.md §2.1 to §2.4
  */
 export function flowCoefficient(
@@ -25,6 +25,7 @@ export function flowCoefficient(
   const { flow, upstreamPressure, downstreamPressure } = conditions;
   if (
     fluid === null ||
+    sheet.flowUnscaled === true ||
     !(flow >= 0) ||
     !(upstreamPressure > downstreamPressure) ||
     !(downstreamPressure >= 0)

@@ -53,7 +53,7 @@ const secondsPerMonth = 30 * 86_400;
  */
 export function dutySummary(prepared: Prepared, sheet: DataSheet, limits: Limits): DutySummary | CannotJudge {
   if (sheet.trip) return cannotJudge('trip-valve');
-  if (prepared.flow === null) return cannotJudge('no-flow');
+  if (prepared.flow === null || sheet.flowUnscaled === true) return cannotJudge('no-flow');
   if (sheet.fluid === null) return cannotJudge('no-fluid-data');
   const blocks = dutyBlocks(prepared, sheet, limits);
   if (blocks === null) return cannotJudge('no-pressures');

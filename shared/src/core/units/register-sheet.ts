@@ -31,7 +31,7 @@ export function registerSheet(sheet: RegisterSheet, reading: Reading): DataSheet
             .map(({ travel, coefficient }) => ({ travel, coefficient: coefficient / perKv }))
             .sort((one, other) => one.travel - other.travel),
     style: sheet.style,
-    fluid: scaled && sheet.fluid !== null ? plainFluid(sheet.fluid) : null,
+    fluid: sheet.fluid === null ? null : plainFluid(sheet.fluid),
     FL: sheet.FL,
     xT: sheet.xT,
     Fd: sheet.Fd,
@@ -41,6 +41,7 @@ export function registerSheet(sheet: RegisterSheet, reading: Reading): DataSheet
     criticality: sheet.criticality,
     designBand: sheet.designBand,
     flowBasis: basis,
+    flowUnscaled: !scaled,
     flowSpan: flowSpan(sheet, reading),
     designCases: scaled ? sheet.designCases.map((c, i) => designCase(c, i, sheet, reading)) : [],
   };

@@ -109,7 +109,7 @@ describe('a valve of the register in the core’s units', () => {
   it('lets nothing but the installed characteristic be made from a flow in % or without a unit', () => {
     for (const unit of ['%', null]) {
       const reading = read(aForm({ flowSpan: 100 }, { flow: { unit } }));
-      expect(reading.valve.dataSheet).toMatchObject({ fluid: null, designCases: [], flowSpan: 100 });
+      expect(reading.valve.dataSheet).toMatchObject({ flowUnscaled: true, designCases: [], flowSpan: 100 });
       expect(reading.doubts).toContainEqual({
         pointer: '/signals/flow/unit',
         code: 'flow-without-scale',

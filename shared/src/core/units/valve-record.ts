@@ -27,7 +27,7 @@ export interface FormProblems {
  * Turns the register's form of a valve into the core's units (methods.md §0), once, at the edge.
  *
  * The flow basis is that of the flow signal's unit, else of the flow span's, else volume. A flow in % or without any
- * unit has no scale: the record then carries no fluid and no design cases, so that nothing but the installed
+ * unit has no scale: the record then says `flowUnscaled` and carries no design cases, so that nothing but the installed
  * characteristic can be made from it, and a doubt says so. Mode must already be 1 (automatic) or 0 (manual).
  * Set point and process value keep their own unit where it is no flow: only their difference counts.
  *
