@@ -60,6 +60,8 @@ export interface FittedKind {
   /** rangeability of equal percentage, exponent n of quick opening, null otherwise */
   readonly parameter: number | null;
   readonly aicc: number;
+  /** probability of the kind, all kinds being equally likely before the record (kind-evidence.ts) */
+  readonly probability: number;
   /** rms relative residual over the bins */
   readonly rms: number;
 }
@@ -195,6 +197,8 @@ export interface Movement {
         readonly median: number;
         readonly share: number;
         readonly sizes: readonly number[];
+        /** dead band plus stick band S, % travel, read from where the stem slipped; null with too few jumps */
+        readonly stickBand: { readonly value: number; readonly standardError: number } | null;
       }
     | CannotJudge;
   readonly oscillation: Oscillation | CannotJudge | null;

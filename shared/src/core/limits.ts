@@ -89,6 +89,8 @@ export const defaultLimits = {
     kindBins: 5,
     kindSpan: 20,
     aiccMargin: 6,
+    /** probability a kind needs to be named */
+    kindProbability: 0.95,
     curveDifference: 0.012,
     kindAgreement: 0.9,
     kindResamples: 60,
@@ -156,10 +158,16 @@ export const defaultLimits = {
     directionNeedRatio: 1.25,
     /** how far the reference may have come back from its furthest point */
     directionRetreat: 0.15,
+    /** movement of the stem within these seconds that shows it engaged */
+    engagedSeconds: 300,
+    engagedMove: 0.2,
     slowSeconds: 60,
     slowMove: 1.5,
     slowShare: 0.05,
     directionBinWidth: 2,
+    /** bins wanted over the travel visited; narrower ones are used where it is short */
+    directionBinsWanted: 10,
+    directionBinNarrowest: 0.5,
     directionBinSamples: 12,
     directionBins: 3,
     /** added to the threshold of a split against the flow where no pressures are recorded */
@@ -174,6 +182,7 @@ export const defaultLimits = {
     jumpZigZag: 0.3,
     jumpShare: 0.15,
     jumpMedian: 0.6,
+    jumpsEachWay: 5,
     /** §6.5 */
     mismatchDays: 0.9,
     mismatchLow: 2,

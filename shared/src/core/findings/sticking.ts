@@ -8,15 +8,18 @@ export const sticking: FindingRule = {
   measure({ movement, resolution }, _sheet, limits) {
     if (movement === null) return [];
     const { demandToPosition: split, jumps } = movement;
-    if ('reason' in split) return split;
     if ('reason' in jumps) return jumps;
     const rules = limits.movement;
+    const band =
+      jumps.stickBand ??
+      ('reason' in split ? null : { value: split.deadBand, standardError: split.standardError });
+    if (band === null) return 'reason' in split ? split : [];
     return [
       {
         ...limits.findings.kinds.Sticking,
-        x: split.deadBand,
+        x: band.value,
         rule: 'jumps',
-        standardError: split.standardError,
+        standardError: band.standardError,
         holds: jumps.share >= rules.jumpShare && jumps.median >= rules.jumpMedian,
         severityFactor: 1,
         rests: { onPosition: true, onPressures: false },
@@ -24,7 +27,7 @@ export const sticking: FindingRule = {
           jump: jumps.median,
           jumpShare: jumps.share,
           jumps: jumps.count,
-          bins: split.bins,
+          deadBand: 'reason' in split ? null : split.deadBand,
           resolution: resolution.travel,
         },
       },

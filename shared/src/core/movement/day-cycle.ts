@@ -9,11 +9,12 @@ const harmonics = 12;
 const nearness = 0.03;
 /** The day is a line of the spectrum where it stands this far above its neighbours. */
 const lineRatio = 3;
+const harmonicMargin = 1.5;
 const neighbours = [-3.5, -2.5, -1.5, 1.5, 2.5, 3.5] as const;
 
 /**
- * True where a period is a fraction of the day and the day itself swings the travel more, as a line of the
- * spectrum: the load's daily course, not the loop, is then seen (our choice; a loop that hunts at 6 h does not
+ * True where a period is a fraction of the day and the day itself swings the travel enough to have it as a harmonic, as
+ * a line of the spectrum: the load's daily course, not the loop, is then seen (our choice; a loop that hunts at 6 h does not
  * swing at 24 h or 12 h).
  *
  * @param column travel
@@ -32,6 +33,7 @@ export function isDayCycle(column: Column, period: number): boolean {
     const cycles = of * days;
     const line = swing(cycles);
     const around = median(neighbours.map((n) => swing(Math.max(0.5, cycles + n))));
-    return line > own && line > lineRatio * around;
+    // the harmonics of a load that goes up and down by ramps or steps fall at least as one over their order
+    return (harmonicMargin * line * of) / order > own && line > lineRatio * around;
   });
 }

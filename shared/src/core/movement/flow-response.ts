@@ -6,7 +6,7 @@ const usualRatioFactor = 0.7;
 const usualHeatRatio = 1.4;
 
 /**
- * ln of flow coefficient up to a constant, at every grid point: the response of a dead-band split, for which
+ * ln of flow coefficient up to a constant, at a grid point: the response of a dead-band split, for which
  * constant factors fall out. Without both pressures: ln of flow.
  *
  * Liquid: ln q − ½ ln ΔP. Gas: ln q − ½ ln(ΔP·P1) − ln Y, with Y and x held at choking (IEC 60534-2-1); changes of
@@ -22,34 +22,24 @@ export function flowResponse(
   pressures: boolean,
   sheet: DataSheet,
   flowLow: number,
-): Float64Array | null {
-  const { flow, upstreamPressure, downstreamPressure, count } = prepared;
+): ((i: number) => number) | null {
+  const { flow, upstreamPressure, downstreamPressure } = prepared;
   if (flow === null) return null;
-  const y = new Float64Array(count);
+  if (!pressures || upstreamPressure === null || downstreamPressure === null)
+    return (i) => logAbove(flow[i] as number, flowLow);
   const gas = sheet.fluid?.phase === 'gas';
   const choked = ((sheet.fluid?.specificHeatRatio ?? usualHeatRatio) / 1.4) * (sheet.xT ?? usualRatioFactor);
-  for (let i = 0; i < count; i++) {
-    const q = flow[i] as number;
-    if (!(q > flowLow)) {
-      y[i] = NaN;
-      continue;
-    }
-    if (!pressures || upstreamPressure === null || downstreamPressure === null) {
-      y[i] = Math.log(q);
-      continue;
-    }
+  return (i) => {
     const before = upstreamPressure[i] as number;
     const drop = before - (downstreamPressure[i] as number);
-    if (!(drop > 0)) {
-      y[i] = NaN;
-      continue;
-    }
-    if (!gas) {
-      y[i] = Math.log(q) - 0.5 * Math.log(drop);
-      continue;
-    }
+    if (!(drop > 0)) return NaN;
+    const lnFlow = logAbove(flow[i] as number, flowLow);
+    if (!gas) return lnFlow - 0.5 * Math.log(drop);
     const x = Math.min(drop / before, choked);
-    y[i] = Math.log(q / (1 - x / (3 * choked))) - 0.5 * Math.log(x * before * before);
-  }
-  return y;
+    return lnFlow - Math.log(1 - x / (3 * choked)) - 0.5 * Math.log(x * before * before);
+  };
+}
+
+function logAbove(flow: number, low: number): number {
+  return flow > low ? Math.log(flow) : NaN;
 }

@@ -5,7 +5,7 @@ import { type SteadyWindows } from '../preparation/steady-windows.js';
 import { type Prepared, valveState } from '../preparation/prepared.js';
 import { cannotJudge, type CannotJudge } from '../reasons.js';
 import { dailyMovement } from './daily-movement.js';
-import { directionSplit, splitBuffers } from './direction-split.js';
+import { directionSplit, slowSamplesFor, type SplitPair } from './direction-split.js';
 import { flowResponse } from './flow-response.js';
 import { mismatch } from './mismatch.js';
 import { oscillationOf } from './oscillation.js';
@@ -37,20 +37,29 @@ export function movementOf(
   const legs = zigZag(prepared.travel, usable, threshold);
   const jumps = restJumpRest(prepared, usable, limits);
   const splits = directionSplits(prepared, usable, windows.source === 'measured', sheet, limits);
-  const sticking =
-    'count' in jumps &&
-    jumps.share >= rules.jumpShare &&
-    jumps.median >= rules.jumpMedian &&
-    'deadBand' in splits.demandToPosition &&
-    splits.demandToPosition.deadBand >= limits.findings.kinds.Sticking.raise;
   return {
     threshold,
     ...dailyMovement(legs, prepared.travel, usable, prepared),
     ...splits,
     jumps,
-    oscillation: oscillationOf(prepared, controlled, sticking, limits),
+    oscillation: oscillationOf(prepared, controlled, isSticking(jumps, splits, limits), limits),
     mismatch: mismatch(prepared, usable, limits),
   };
+}
+
+function isSticking(
+  jumps: Movement['jumps'],
+  { demandToPosition }: Pick<Movement, 'demandToPosition'>,
+  limits: Limits,
+): boolean {
+  if ('reason' in jumps) return false;
+  const rules = limits.movement;
+  const band = jumps.stickBand?.value ?? ('deadBand' in demandToPosition ? demandToPosition.deadBand : 0);
+  return (
+    jumps.share >= rules.jumpShare &&
+    jumps.median >= rules.jumpMedian &&
+    band >= limits.findings.kinds.Sticking.raise
+  );
 }
 
 /** 1 where all bits of `has` and none of `hasNot` are set. */
@@ -72,36 +81,78 @@ function directionSplits(
   limits: Limits,
 ): Splits {
   const { demand, position } = prepared;
-  const buffers = splitBuffers(prepared.count);
+  const room = slowSamplesFor(prepared.count);
   const flowLow = limits.windows.flowLowShare * prepared.flowSpan;
-  const response = flowResponse(prepared, pressures, sheet, flowLow);
+  const flowAt = flowResponse(prepared, pressures, sheet, flowLow);
   const legsOf = (reference: Float64Array | null) =>
     reference === null ? null : zigZag(reference, usable, limits.movement.directionThreshold);
   const demandLegs = legsOf(demand);
   const positionLegs = legsOf(position);
-  const split = (reference: Float64Array, legs: Legs, y: Float64Array): DirectionSplit | CannotJudge =>
-    directionSplit({ reference, response: y, legs }, prepared, limits, buffers);
+  const split = (pair: SplitPair) => directionSplit(pair, prepared, limits, room);
   const noDemand = cannotJudge('no-demand');
   const noPosition = cannotJudge('demand-only');
   const noFlow = cannotJudge('no-flow');
+  const toFlow = (reference: Float64Array | null, legs: Legs | null, absent: CannotJudge) => {
+    if (flowAt === null) return noFlow;
+    return reference === null || legs === null
+      ? absent
+      : split({ reference, responseAt: flowAt, legs, slope: null });
+  };
   return {
     demandToPosition:
-      demandLegs === null || demand === null
+      demand === null || demandLegs === null
         ? noDemand
         : position === null
           ? noPosition
-          : split(demand, demandLegs, position),
-    positionToFlow:
-      response === null
-        ? noFlow
-        : positionLegs === null || position === null
-          ? noPosition
-          : split(position, positionLegs, response),
-    demandToFlow:
-      response === null
-        ? noFlow
-        : demandLegs === null || demand === null
-          ? noDemand
-          : split(demand, demandLegs, response),
+          : larger(
+              split(positionOnDemand(demand, position, demandLegs)),
+              split(engagedPosition(demand, position, demandLegs, prepared, limits)),
+            ),
+    positionToFlow: toFlow(position, positionLegs, noPosition),
+    demandToFlow: toFlow(demand, demandLegs, noDemand),
   };
+}
+
+function positionOnDemand(demand: Float64Array, position: Float64Array, legs: Legs): SplitPair {
+  return { reference: demand, responseAt: (i) => position[i] as number, legs, slope: 1 };
+}
+
+/**
+ * The same band read where the stem moves: how far demand is ahead of it while it opens, less while it closes, at
+ * the same position. Binned by position, because demand stands a whole band apart there. Written as a response of
+ * slope 1, position less (demand − position).
+ */
+function engagedPosition(
+  demand: Float64Array,
+  position: Float64Array,
+  legs: Legs,
+  { step }: Prepared,
+  limits: Limits,
+): SplitPair {
+  const rules = limits.movement;
+  const back = Math.max(1, Math.round(rules.engagedSeconds / step));
+  return {
+    reference: demand,
+    binnedBy: position,
+    responseAt: (i) => 2 * (position[i] as number) - (demand[i] as number),
+    legs,
+    slope: 1,
+    engaged: (i, up) => {
+      const moved = (position[i] as number) - (position[i - back] as number);
+      return (up ? moved : -moved) >= rules.engagedMove;
+    },
+  };
+}
+
+/**
+ * The larger of two readings. A run of demand shorter than the dead band leaves the stem where it was, which the
+ * first reading takes for no dead band at all; the second, of samples in which the stem is seen to move, has no
+ * such samples, but reads a sticking stem just after its jump, where little of the band is left.
+ */
+function larger(
+  one: DirectionSplit | CannotJudge,
+  other: DirectionSplit | CannotJudge,
+): DirectionSplit | CannotJudge {
+  if ('reason' in one) return other;
+  return 'reason' in other || other.deadBand < one.deadBand ? one : other;
 }

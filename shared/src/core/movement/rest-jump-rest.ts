@@ -2,11 +2,14 @@ import { type Movement } from '../assessment.js';
 import { type Limits } from '../limits.js';
 import { type Prepared } from '../preparation/prepared.js';
 import { cannotJudge } from '../reasons.js';
+import { mad } from '../statistics/mad.js';
 import { median } from '../statistics/quantile.js';
 import { wayOf, zigZag } from './zig-zag.js';
 
 /** Jumps whose size is kept for the histogram. */
 const sizesKept = 500;
+/** Standard error of a median against that of a mean. */
+const medianFactor = 1.2533;
 
 /**
  * Jumps of a sticking stem: it rests, moves at once by more than the demand asked for meanwhile, and rests again.
@@ -28,8 +31,8 @@ export function restJumpRest(prepared: Prepared, usable: Uint8Array, limits: Lim
     return cannotJudge('sampled-too-slowly', { spacing, needed: rules.jumpScan });
   const rest = Math.max(2, Math.round(rules.restSeconds / step));
   const within = Math.max(1, Math.round(rules.jumpSeconds / step));
-  const sizes: number[] = [];
-  let way = 0;
+  const up: Jumps = { size: [], lag: [] };
+  const down: Jumps = { size: [], lag: [] };
   const last = prepared.count - within - rest;
   for (let i = rest; i < last; i++) {
     // most samples fail here: nothing moved
@@ -37,21 +40,67 @@ export function restJumpRest(prepared: Prepared, usable: Uint8Array, limits: Lim
     if (usable[i] !== 1 || usable[i + within + rest] !== 1) continue;
     if (!rests(x, i - rest, i, rules.restTravel)) continue;
     if (!rests(x, i + within, i + within + rest, rules.restTravel)) continue;
-    const jump = meanOf(x, i + within, i + within + rest) - meanOf(x, i - rest, i);
+    const before = meanOf(x, i - rest, i);
+    const jump = meanOf(x, i + within, i + within + rest) - before;
     const asked = (u[i + within] as number) - (u[i] as number);
-    if (!(Math.abs(jump) >= rules.jumpTravel) || !(Math.abs(jump) >= rules.jumpDemandRatio * Math.abs(asked)))
-      continue;
-    sizes.push(Math.abs(jump));
-    way += Math.abs(jump);
+    if (!(Math.abs(jump) >= Math.max(rules.jumpTravel, rules.jumpDemandRatio * Math.abs(asked)))) continue;
+    const side = jump > 0 ? up : down;
+    side.size.push(Math.abs(jump));
+    side.lag.push((u[slipBetween(x, i, i + within)] as number) - before);
     i += within;
   }
+  const sizes = [...up.size, ...down.size];
+  const way = sizes.reduce((sum, size) => sum + size, 0);
   const travelled = wayOf(zigZag(x, usable, rules.jumpZigZag), x);
+  const typical = sizes.length > 0 ? median(sizes) : 0;
   return {
     count: sizes.length,
-    median: sizes.length > 0 ? median(sizes) : 0,
+    median: typical,
     share: travelled > 0 ? way / travelled : 0,
     sizes: thinned(sizes),
+    stickBand: stickBand(up, down, typical, rules.jumpsEachWay),
   };
+}
+
+interface Jumps {
+  readonly size: number[];
+  /** demand less position when it slipped */
+  readonly lag: number[];
+}
+
+/**
+ * Dead band plus stick band S, from where the stem slipped: it slips up when demand is fS ahead and down when it is
+ * fS behind, so the two lie 2·fS apart, and S = 2·fS − J with J = fS − fD (our reading of the model of He et al. 2007).
+ *
+ * Unlike the direction split this holds in a limit cycle too, where demand turns as soon as the stem has slipped.
+ *
+ * @returns null with fewer than `least` jumps in either direction
+ */
+function stickBand(
+  up: Jumps,
+  down: Jumps,
+  jump: number,
+  least: number,
+): { value: number; standardError: number } | null {
+  if (Math.min(up.lag.length, down.lag.length) < least) return null;
+  const error = (lag: readonly number[]) => (medianFactor * mad(lag)) / Math.sqrt(lag.length);
+  return {
+    value: median(up.lag) - median(down.lag) - jump,
+    standardError: Math.hypot(error(up.lag), error(down.lag)),
+  };
+}
+
+/** The last point before the largest change of x. */
+function slipBetween(x: Float64Array, from: number, to: number): number {
+  let at = from;
+  let most = 0;
+  for (let i = from; i < to; i++) {
+    const change = Math.abs((x[i + 1] as number) - (x[i] as number));
+    if (change <= most) continue;
+    most = change;
+    at = i;
+  }
+  return at;
 }
 
 /** True where all values from `from` to `to`, both included, lie within `band` of each other. */
