@@ -41,7 +41,7 @@ const sentences: Record<ReasonCode, (f: Figures) => string> = {
   'sampled-too-slowly': (f) =>
     `Sampled too slowly${has(f, 'spacing') ? ` (every ${duration(fig(f, 'spacing'))}${has(f, 'needed') ? `; ${duration(fig(f, 'needed'))} or faster needed` : ''})` : ''}.`,
   'models-too-close': (f) =>
-    `Two kinds fit nearly equally well${has(f, 'margin') ? ` (AICc apart by ${number(fig(f, 'margin'), 1)})` : ''}; a wider span of travel would tell them apart.`,
+    `Two kinds fit nearly equally well${has(f, 'probability') ? ` (the better one is right with ${share(fig(f, 'probability'))})` : ''}; a wider span of travel would tell them apart.`,
   'not-repeatable': (f) =>
     `Different days favour different kinds${has(f, 'agreement') ? ` (the best won in ${share(fig(f, 'agreement'))} of resamples)` : ''}.`,
   'design-pressures-disagree': () =>

@@ -5,7 +5,7 @@ import { type SteadyWindows } from '../preparation/steady-windows.js';
 import { cannotJudge, type CannotJudge } from '../reasons.js';
 import { median, quantile } from '../statistics/quantile.js';
 import { dayResamples } from './day-resamples.js';
-import { fitShift, type ShiftFit } from './shift-fit.js';
+import { fitShift, isOffset, type ShiftFit } from './shift-fit.js';
 import { specifiedCurve } from './specified-curve.js';
 import { spanOf, type TravelBins } from './travel-bins.js';
 
@@ -68,7 +68,7 @@ function deviationFrom(
   limits: Limits,
 ): Deviation {
   const identifiable = 100 * fit.shiftError <= limits.comparison.shiftStandardError;
-  const shifted = identifiable && isOffset(fit, limits);
+  const shifted = isOffset(fit, limits);
   const capacity = shifted ? fit.jointCapacity : fit.capacity;
   const shift = shifted ? fit.shift : 0;
 
@@ -103,15 +103,6 @@ function deviationFrom(
     byTravel,
     suspectedUnitFactor: unitFactorNear(Math.exp(capacity)),
   };
-}
-
-/** A shift large, sure and worth its parameter (§4.3). */
-export function isOffset(fit: ShiftFit, limits: Limits): boolean {
-  return (
-    Math.abs(fit.shift) >= 3 * fit.shiftError &&
-    100 * Math.abs(fit.shift) >= limits.findings.kinds['Travel offset'].raise &&
-    fit.jointAicc <= fit.capacityAicc - limits.characteristic.aiccMargin
-  );
 }
 
 function whyNotSeparable(fit: ShiftFit, bins: TravelBins): CannotJudge {

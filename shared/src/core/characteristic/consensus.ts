@@ -2,7 +2,7 @@ import { type CharacteristicKind } from '../data-sheet.js';
 import { type Limits } from '../limits.js';
 import { type SteadyWindows } from '../preparation/steady-windows.js';
 import { cannotJudge, type CannotJudge } from '../reasons.js';
-import { fitKinds } from './fit-kinds.js';
+import { kindEvidence } from './kind-evidence.js';
 import { kindVerdict } from './kind-verdict.js';
 import { regularBins, travelBins } from './travel-bins.js';
 
@@ -38,7 +38,7 @@ export function consensusKind(
       return other > 0 ? value + 0.5 * Math.log(drop / other) : NaN;
     });
     const bins = travelBins(windows, L, regularBins(demandOnly, limits), limits);
-    if (bins.count < 2 || kindVerdict(fitKinds(bins, limits), bins, limits) !== kind)
+    if (bins.count < 3 || kindVerdict(kindEvidence(bins, limits)(bins.y), bins, limits) !== kind)
       return cannotJudge('design-pressures-disagree');
   }
   return null;

@@ -7,6 +7,7 @@ import { dayResamples } from './day-resamples.js';
 import { type CharacteristicSetting, decideKind } from './decide-kind.js';
 import { basesAt, fitKinds, fittedLog, type KindFit, refitKind, shapeParameter } from './fit-kinds.js';
 import { installedCurve } from './installed-curve.js';
+import { kindEvidence, likeliest } from './kind-evidence.js';
 import { descriptiveStep, parameterIntervals } from './parameter-intervals.js';
 import { regularBins, spanOf, travelBins, type TravelBins } from './travel-bins.js';
 
@@ -133,23 +134,23 @@ function inherent(
 ): CharacteristicFit {
   const { limits } = setting;
   const rules = limits.characteristic;
+  const evidenceOf = kindEvidence(bins, limits);
+  const evidence = evidenceOf(bins.y);
+  const likely = likeliest(evidence).kind;
   const fits = fitKinds(bins, limits);
-  const best = fits[0] as KindFit;
-  const bases = basesAt(bins.h, limits);
+  const best = fits.find((f) => f.kind === likely) as KindFit;
+  const basis = basesAt(bins.h, limits).get(likely) as Float64Array;
   const resample = dayResamples(windows, bins, windows.L, bins.y, setting.random);
 
   const redrawn: { intercept: number; slope: number }[] = [];
   let won = 0;
   for (let k = 0; k < rules.bandResamples; k++) {
-    const points = { ...bins, y: resample(new Float64Array(bins.count)) };
-    const refits = fits.map((f) =>
-      refitKind(f.kind, bases.get(f.kind) as Float64Array, points, f.weights, limits),
-    );
-    redrawn.push(refits[0] as (typeof refits)[number]);
-    if (k < rules.kindResamples && refits.every((f) => f.aicc >= (refits[0] as { aicc: number }).aicc)) won++;
+    const y = resample(new Float64Array(bins.count));
+    redrawn.push(refitKind(likely, basis, { ...bins, y }, best.weights, limits));
+    if (k < rules.kindResamples && likeliest(evidenceOf(y)).kind === likely) won++;
   }
   const agreement = won / Math.min(rules.kindResamples, rules.bandResamples);
-  const kind = decideKind(windows, bins, fits, agreement, setting);
+  const kind = decideKind(windows, bins, evidence, agreement, best.rms, setting);
   const named = typeof kind === 'string';
 
   const at = curveTravels(bins);
@@ -181,6 +182,7 @@ function inherent(
       curve: at.map((h, i) => curvePoint(h, fittedLog(best, h, limits), band[i])),
       fits: fits.map((f) => ({
         kind: f.kind,
+        probability: evidence.get(f.kind) ?? 0,
         ratedCoefficient: Math.exp(f.intercept),
         parameter: shapeParameter(f),
         aicc: f.aicc,

@@ -63,6 +63,14 @@ function lawOf(kind: CharacteristicKind, limits: Limits): Law {
   }
 }
 
+/** Bounds of a kind's slope in ln C = ln C₁₀₀ + slope·basis(h); equal where the law has no shape parameter. */
+export function slopeBounds(
+  kind: CharacteristicKind,
+  limits: Limits,
+): { readonly low: number; readonly high: number } {
+  return lawOf(kind, limits).slope;
+}
+
 /** ln C of a fit at a relative travel above 0. */
 export function fittedLog(
   fit: Pick<KindFit, 'kind' | 'intercept' | 'slope'>,

@@ -85,6 +85,16 @@ export function fitShift(
   };
 }
 
+/** A shift that is identified, large, sure and worth its parameter (§4.3). */
+export function isOffset(fit: ShiftFit, limits: Limits): boolean {
+  return (
+    Math.abs(fit.shift) >= 3 * fit.shiftError &&
+    100 * fit.shiftError <= limits.comparison.shiftStandardError &&
+    100 * Math.abs(fit.shift) >= limits.findings.kinds['Travel offset'].raise &&
+    fit.jointAicc <= fit.capacityAicc - limits.characteristic.aiccMargin
+  );
+}
+
 /** ln Φ kept finite where a trial shift leaves 0 to 1. */
 function logPhi(specified: (h: number) => number, h: number): number {
   const phi = specified(Math.min(1, Math.max(0.001, h)));
