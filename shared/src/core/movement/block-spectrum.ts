@@ -92,11 +92,11 @@ export class BlockSpectrum {
    */
   find(block: Float64Array): BlockOscillation | null {
     const { rules } = this;
-    const { hold, rms } = this.changesOf(block);
+    const rms = this.changesOf(block);
     // the longest period makes the smallest changes: less than this cannot be an oscillation worth a word
     const least = (rules.amplitude * 2 * Math.sin(Math.PI / rules.longest)) / Math.SQRT2;
     if (!(rms >= least)) return null;
-    const held = this.holdAt(hold);
+    const held = this.holdAt(rules.clip * madFactor * this.ordinaryChange());
     const found = held >= least ? this.look() : null;
     if (found !== null || !(held < jumpRatio * rms)) return found;
     // a stem that rests and jumps changes in few cells only: what was held is then the oscillation itself
@@ -114,19 +114,23 @@ export class BlockSpectrum {
     return peak > 0 ? this.judge(peak) : null;
   }
 
-  /** Changes from cell to cell; where they would be held, and their rms. */
-  private changesOf(block: Float64Array): { hold: number; rms: number } {
-    const { changes, sizes, cells } = this;
+  /** Changes from cell to cell; returns their rms. */
+  private changesOf(block: Float64Array): number {
+    const { changes, cells } = this;
     let squares = 0;
     changes[0] = 0;
     for (let i = 1; i < cells; i++) {
       const change = (block[i] as number) - (block[i - 1] as number);
       changes[i] = change;
-      sizes[i] = Math.abs(change);
       squares += change * change;
     }
-    const hold = this.rules.clip * madFactor * medianInPlace(sizes, 1, cells);
-    return { hold, rms: Math.sqrt(squares / (cells - 1)) };
+    return Math.sqrt(squares / (cells - 1));
+  }
+
+  private ordinaryChange(): number {
+    const { changes, sizes, cells } = this;
+    for (let i = 1; i < cells; i++) sizes[i] = Math.abs(changes[i] as number);
+    return medianInPlace(sizes, 1, cells);
   }
 
   /** Holds the changes at ±hold and takes their mean out; returns the rms of what is left. */

@@ -23,6 +23,8 @@ export const cellsPerPeriod = 8;
 const slack = 1.08;
 /** Up to this many blocks they overlap by half. */
 const fewBlocks = 24;
+/** Of more than this many, evenly spread ones are looked at: their share is then known to 2 %. */
+const manyBlocks = 600;
 
 /**
  * The octaves of periods a column can show, each with blocks of `blockCycles` of its longest period; the last is
@@ -55,7 +57,7 @@ export function blockPlans(
       cellPoints,
       cell: cellPoints * step,
       cells,
-      stride: apart <= fewBlocks ? Math.max(1, points >> 1) : points,
+      stride: apart <= fewBlocks ? Math.max(1, points >> 1) : points * Math.ceil(apart / manyBlocks),
       apart,
       shortest: plans.length === 0 ? shortest : shortest / slack,
       longest: longest * slack,

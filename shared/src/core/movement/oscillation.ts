@@ -112,8 +112,9 @@ function lookThrough(column: Column, plan: BlockPlan, limits: Limits): Found | n
     if (found !== null)
       oscillating.push({ ...found, from, to: from + points, period: found.period * plan.cell });
   }
-  // overlapping blocks count by what they cover
-  if (judged * plan.stride + points - plan.stride < rules.leastBlocks * points) return null;
+  // overlapping blocks count by what they cover, spread ones each by itself
+  const covered = judged * Math.min(plan.stride, points) + Math.max(0, points - plan.stride);
+  if (covered < rules.leastBlocks * points) return null;
   const blocks = samePeriod(oscillating, rules.oscillationSpread);
   return {
     blocks,
