@@ -69,7 +69,7 @@ describe('assess', () => {
     expect(new Set(refused).size).toBe(refused.length);
     for (const finding of a.findings) expect(refused).not.toContain(finding.kind);
     expect(a.notJudged).toContainEqual(
-      expect.objectContaining({ kind: 'Lost capacity', reason: 'no-pressures' }),
+      expect.objectContaining({ kind: 'Off characteristic', reason: 'no-pressures' }),
     );
   });
 });
@@ -152,6 +152,9 @@ describe('what cannot be judged', () => {
       demand: mirrored(record.demand),
     });
     expect(a.reason?.reason).toBe('flow-falls-as-valve-opens');
+    expect(a.warnings.map((w) => w.code)).toContain('flow-falls-as-valve-opens');
+    const half = assessed({}, aSheet(), { ...record, demand: mirrored(record.demand) });
+    expect(half.warnings.map((w) => w.code)).toContain('demand-against-position');
   });
 });
 
@@ -235,10 +238,9 @@ describe('whatever a record contains', () => {
         rows.map(([, , good]) => (good ? 1 : 0)),
       ),
     );
-  const anyHistory = fc.record(
-    Object.fromEntries(signalRoles.map((role) => [role, anySeries])),
-    { requiredKeys: [] },
-  );
+  const anyHistory = fc.record(Object.fromEntries(signalRoles.map((role) => [role, anySeries])), {
+    requiredKeys: [],
+  });
   const anyNumber = fc.option(fc.oneof(fc.double({ noNaN: false }), fc.integer({ min: -5, max: 200 })), {
     nil: null,
   });

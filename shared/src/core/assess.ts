@@ -16,6 +16,7 @@ import { find } from './findings/find.js';
 import { type Chapters } from './findings/finding-rule.js';
 import { defaultLimits, type Limits } from './limits.js';
 import { movementOf } from './movement/movement.js';
+import { runsAgainst } from './preparation/runs-against.js';
 import { prepare } from './preparation/prepare.js';
 import { type Prepared, valveState } from './preparation/prepared.js';
 import { type SteadyWindows, steadyWindows } from './preparation/steady-windows.js';
@@ -85,7 +86,7 @@ export function assess(
     drift: 'series' in drift ? drift : null,
     passing: passingOf(prepared, sheet, limits),
     service: serviceStress(prepared, windows, sheet, limits),
-    warnings: prepared.warnings,
+    warnings: [...prepared.warnings, ...reverseAction(prepared, fit)],
   };
   const found = find(chapters, sheet, limits);
   const refusal = principalRefusal(prepared, fit, range);
@@ -98,6 +99,18 @@ export function assess(
     notJudged: [...refusedChapters(fit, range, chapters, limits), ...found.notJudged],
     ...attentionOf(found.findings, sheet),
   };
+}
+
+/** A signal that looks reverse acting without being declared so: nothing is turned round, it is only said. */
+function reverseAction(
+  { demand, position }: Prepared,
+  { refusal }: CharacteristicFit,
+): Assessment['warnings'] {
+  const warnings: { code: string; figures: Record<string, number> }[] = [];
+  if (refusal?.reason === 'flow-falls-as-valve-opens') warnings.push({ code: refusal.reason, figures: {} });
+  if (demand !== null && position !== null && runsAgainst(demand, position))
+    warnings.push({ code: 'demand-against-position', figures: {} });
+  return warnings;
 }
 
 function curveOf({ bins, logCurve }: CharacteristicFit) {
@@ -177,14 +190,8 @@ function windowUse(prepared: Prepared, windows: SteadyWindows, span: Span): Wind
     steadyWindows: windows.count,
     periods: periods.size,
     runningPeriods: slots.size,
-    leftOut: { ...prepared.leftOut, ...windowReasons(windows) },
+    leftOut: Object.fromEntries(
+      Object.entries({ ...prepared.leftOut, ...windows.leftOut }).filter(([, n]) => n > 0),
+    ),
   };
-}
-
-function windowReasons({ leftOut }: SteadyWindows): Record<string, number> {
-  return Object.fromEntries(
-    Object.entries(leftOut)
-      .filter(([, n]) => n > 0)
-      .map(([reason, n]) => [`windows: ${reason}`, n]),
-  );
 }

@@ -57,6 +57,8 @@ export function prepare(
     stateRules(grid, recorded.flowSpan, limits),
   );
   for (const spell of frozen.spells) {
+    const reason = spell.bit === valveState.frozen ? 'frozen' : 'outage';
+    leftOut[reason] = (leftOut[reason] ?? 0) + spell.to - spell.from;
     for (let i = spell.from; i < spell.to; i++)
       state[i] = ((state[i] as number) & ~valveState.inService) | spell.bit;
   }
