@@ -3,9 +3,10 @@ import { InjectRepository } from '@nestjs/typeorm';
 import { type Area, type Me } from '@tailrace/shared/contracts/people';
 import { type Actor, type Role } from '@tailrace/shared/contracts/policy';
 import { randomUUID } from 'node:crypto';
-import { DataSource, Repository } from 'typeorm';
+import { Repository } from 'typeorm';
 import { AuditService } from '../audit/audit.service.js';
 import { Clock } from '../platform/clock.js';
+import { Transactions } from '../platform/database/transactions.js';
 import { Problem } from '../platform/problem.js';
 import { AreaEntity } from './area.entity.js';
 import { hashPassword } from './passwords.js';
@@ -24,7 +25,7 @@ export interface NewPerson {
 @Injectable()
 export class PeopleService {
   constructor(
-    private readonly database: DataSource,
+    private readonly transactions: Transactions,
     @InjectRepository(PersonEntity) private readonly people: Repository<PersonEntity>,
     @InjectRepository(AreaEntity) private readonly areas: Repository<AreaEntity>,
     @InjectRepository(SiteEntity) private readonly sites: Repository<SiteEntity>,
@@ -66,7 +67,7 @@ export class PeopleService {
     draft: NewPerson,
   ): Promise<PersonEntity> {
     const passwordHash = await hashPassword(draft.password);
-    return this.database.transaction(async (manager) => {
+    return this.transactions.run(async (manager) => {
       if (await manager.existsBy(PersonEntity, { email: draft.email })) throw new Problem('already-exists');
       const person = await manager.save(
         manager.create(PersonEntity, {

@@ -6,6 +6,7 @@ import { createHash, randomBytes, randomUUID } from 'node:crypto';
 import { DataSource, EntityManager, IsNull, Repository } from 'typeorm';
 import { AuditService } from '../audit/audit.service.js';
 import { Clock } from '../platform/clock.js';
+import { Transactions } from '../platform/database/transactions.js';
 import { Problem } from '../platform/problem.js';
 import { passwordFits } from './passwords.js';
 import { PersonEntity } from './person.entity.js';
@@ -35,6 +36,7 @@ const hashed = (token: string) => createHash('sha256').update(token).digest('hex
 export class SessionsService {
   constructor(
     private readonly database: DataSource,
+    private readonly transactions: Transactions,
     @InjectRepository(PersonEntity) private readonly people: Repository<PersonEntity>,
     private readonly jwt: JwtService,
     private readonly audit: AuditService,
@@ -55,7 +57,7 @@ export class SessionsService {
       throw new Problem('sign-in-failed');
     }
     this.tries.succeeded(email);
-    return this.database.transaction(async (manager) => {
+    return this.transactions.run(async (manager) => {
       await this.audit.record(manager, person, {
         action: 'signed in',
         subjectType: 'person',
@@ -70,7 +72,7 @@ export class SessionsService {
    * ends, and whoever holds it signs in again.
    */
   async refresh(token: string): Promise<OpenedSession> {
-    const outcome = await this.database.transaction(async (manager) => {
+    const outcome = await this.transactions.run(async (manager) => {
       const now = this.clock.now();
       const session = await manager.findOneBy(RefreshSessionEntity, { tokenHash: hashed(token) });
       if (!session || session.revokedAt !== null || session.expiresAt <= now) return null;
@@ -101,7 +103,7 @@ export class SessionsService {
   }
 
   async signOut(token: string): Promise<void> {
-    await this.database.transaction(async (manager) => {
+    await this.transactions.run(async (manager) => {
       const session = await manager.findOneBy(RefreshSessionEntity, { tokenHash: hashed(token) });
       if (session) await this.endFamily(manager, session.family);
     });

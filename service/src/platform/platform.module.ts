@@ -5,6 +5,7 @@ import { ThrottlerGuard, ThrottlerModule } from '@nestjs/throttler';
 import { Clock } from './clock.js';
 import { CONFIG, type Config } from './config.js';
 import { DatabaseModule } from './database/database.module.js';
+import { Transactions } from './database/transactions.js';
 import { HealthController } from './health.controller.js';
 import { inputProblem } from './input-problem.js';
 import { ProblemFilter } from './problem.filter.js';
@@ -24,6 +25,7 @@ export class PlatformModule {
       providers: [
         { provide: CONFIG, useValue: config },
         Clock,
+        Transactions,
         { provide: APP_GUARD, useClass: ThrottlerGuard },
         { provide: APP_FILTER, useClass: ProblemFilter },
         {
@@ -36,7 +38,7 @@ export class PlatformModule {
           useFactory: (reflector: Reflector) => new StandardSchemaSerializerInterceptor(reflector),
         },
       ],
-      exports: [CONFIG, Clock],
+      exports: [CONFIG, Clock, Transactions],
     };
   }
 }

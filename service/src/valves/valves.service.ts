@@ -12,6 +12,7 @@ import { AuditService } from '../audit/audit.service.js';
 import { AreaEntity } from '../people/area.entity.js';
 import { visibleTo } from '../people/visible-to.js';
 import { Clock } from '../platform/clock.js';
+import { Transactions } from '../platform/database/transactions.js';
 import { Problem } from '../platform/problem.js';
 import { DataSheetEntity } from './data-sheet.entity.js';
 import { presentValve, presentValveRow, valveFormOf } from './present-valve.js';
@@ -29,6 +30,7 @@ const sortColumns: Record<ValveQuery['sort'], string> = {
 export class ValvesService {
   constructor(
     private readonly database: DataSource,
+    private readonly transactions: Transactions,
     private readonly audit: AuditService,
     private readonly clock: Clock,
   ) {}
@@ -73,7 +75,7 @@ export class ValvesService {
   }
 
   async create(actor: Actor, draft: ValveDraft): Promise<Valve> {
-    return this.database.transaction(async (manager) => {
+    return this.transactions.run(async (manager) => {
       await this.ownArea(manager, actor, draft.areaId);
       await this.tagIsFree(manager, draft.tag, null);
       const now = this.clock.now();
@@ -95,7 +97,7 @@ export class ValvesService {
 
   /** Changes a valve as a whole. `version` says what the editor saw; somebody else's edit in between is not overwritten. */
   async update(actor: Actor, tag: string, draft: ValveDraft): Promise<Valve> {
-    return this.database.transaction(async (manager) => {
+    return this.transactions.run(async (manager) => {
       const before = await this.one(actor, tag, manager);
       await this.ownArea(manager, actor, draft.areaId);
       await this.tagIsFree(manager, draft.tag, before.id);
