@@ -171,12 +171,15 @@ function refusedChapters(
 
 function windowUse(prepared: Prepared, windows: SteadyWindows, span: Span): WindowUse {
   let running = 0;
-  const slots = new Set<number>();
+  let slots = 0;
+  let last = NaN;
   const periods = new Set<number>();
   for (let i = 0; i < prepared.count; i++) {
     if (((prepared.state[i] as number) & valveState.inService) === 0) continue;
     running++;
-    slots.add(Math.floor((prepared.start + i * prepared.step) / windows.slotSeconds));
+    const slot = Math.floor((prepared.start + i * prepared.step) / windows.slotSeconds);
+    if (slot !== last) slots++;
+    last = slot;
   }
   for (let w = 0; w < windows.count; w++)
     periods.add((windows.slot[w] as number) * 64 + Math.floor((windows.h[w] as number) * 50));
@@ -189,7 +192,7 @@ function windowUse(prepared: Prepared, windows: SteadyWindows, span: Span): Wind
     step: prepared.step,
     steadyWindows: windows.count,
     periods: periods.size,
-    runningPeriods: slots.size,
+    runningPeriods: slots,
     leftOut: Object.fromEntries(
       Object.entries({ ...prepared.leftOut, ...windows.leftOut }).filter(([, n]) => n > 0),
     ),
