@@ -1,0 +1,59 @@
+import { keepPreviousData, queryOptions } from '@tanstack/react-query';
+import { type StoredAssessment } from '@tailrace/shared/contracts/assessments';
+import { type LivingFinding } from '@tailrace/shared/contracts/findings';
+import { type Area } from '@tailrace/shared/contracts/people';
+import { type Valve, type ValvePage, type ValveQuery } from '@tailrace/shared/contracts/valves';
+import { api } from '../../lib/api-client';
+
+const of = (tag: string) => `/valves/${encodeURIComponent(tag)}`;
+
+/** The areas of the person signed in. */
+export const areasQuery = queryOptions({
+  queryKey: ['areas'],
+  queryFn: ({ signal }) => api.get<Area[]>('/areas', { signal }),
+  staleTime: 300_000,
+});
+
+export const valvesQuery = (query: Partial<ValveQuery>) =>
+  queryOptions({
+    queryKey: ['valves', 'page', query],
+    queryFn: ({ signal }) => api.get<ValvePage>('/valves', { query, signal }),
+    placeholderData: keepPreviousData,
+  });
+
+export const valveQuery = (tag: string) =>
+  queryOptions({
+    queryKey: ['valves', 'one', tag],
+    queryFn: ({ signal }) => api.get<Valve>(of(tag), { signal }),
+  });
+
+/** One assessment of a valve's history of assessments. */
+export interface AssessmentEntry {
+  readonly id: string;
+  readonly runNumber: number;
+  readonly assessedAt: string;
+  readonly judged: boolean;
+  readonly attention: number | null;
+}
+
+export const assessmentsQuery = (tag: string) =>
+  queryOptions({
+    queryKey: ['assessments', 'of', tag],
+    queryFn: ({ signal }) =>
+      api.get<{ rows: AssessmentEntry[]; total: number }>(`${of(tag)}/assessments`, { signal }),
+  });
+
+/** The latest assessment of a valve, or the one chosen. */
+export const assessmentQuery = (tag: string, id: string | undefined) =>
+  queryOptions({
+    queryKey: ['assessments', 'one', tag, id ?? 'latest'],
+    queryFn: ({ signal }) =>
+      api.get<StoredAssessment>(id ? `/assessments/${id}` : `${of(tag)}/assessment`, { signal }),
+  });
+
+export const findingsOfValveQuery = (tag: string) =>
+  queryOptions({
+    queryKey: ['findings', 'of', tag],
+    queryFn: ({ signal }) =>
+      api.get<{ rows: LivingFinding[]; total: number }>(`${of(tag)}/findings`, { signal }),
+  });

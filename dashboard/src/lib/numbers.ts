@@ -1,0 +1,24 @@
+import { number } from '@tailrace/shared/messages/figures';
+
+/** A number to so many significant digits, without an exponent and without false precision. */
+export function significant(value: number | null | undefined, digits = 3): string {
+  if (value === null || value === undefined || !Number.isFinite(value)) return '–';
+  if (value === 0) return '0';
+  const decimals = Math.max(0, digits - 1 - Math.floor(Math.log10(Math.abs(value))));
+  return number(value, Math.min(decimals, 6));
+}
+
+/** A share 0 to 1 as a percentage's number: small ones keep a decimal. */
+export function percentage(share: number | null | undefined): string {
+  if (share === null || share === undefined || !Number.isFinite(share)) return '–';
+  const percent = share * 100;
+  return number(percent, percent !== 0 && Math.abs(percent) < 9.95 ? 1 : 0);
+}
+
+/** A length in bytes as a person reads it. */
+export function fileSize(bytes: number): string {
+  if (bytes < 1e3) return `${number(bytes)} B`;
+  if (bytes < 1e6) return `${number(bytes / 1e3)} kB`;
+  if (bytes < 1e9) return `${number(bytes / 1e6, 1)} MB`;
+  return `${number(bytes / 1e9, 2)} GB`;
+}
