@@ -1,9 +1,10 @@
 import { Box } from '@mui/material';
 import { type RankingRow as Row } from '@tailrace/shared/contracts/ranking';
-import { type KeyboardEvent } from 'react';
+import { useRef } from 'react';
 import { TravelRidgeAxis } from '../../charts/TravelRidge';
 import { RankingRow } from './RankingRow';
 import { ridgeWidth, rowColumns } from './row-columns';
+import { useRowKeys } from './useRowKeys';
 
 interface RankingRowsProps {
   rows: readonly Row[];
@@ -11,54 +12,78 @@ interface RankingRowsProps {
   label: string;
 }
 
-/** The ranked valves under one head. j and k, or the arrows, move from row to row; Enter opens. */
+const headLook = {
+  ...rowColumns,
+  color: 'text.secondary',
+  fontSize: '0.8125rem',
+  lineHeight: 1.3,
+  display: { xs: 'none', md: 'grid' },
+  alignItems: 'end',
+  pt: 0.5,
+  pb: 0.25,
+  '& th': { p: 0, fontWeight: 500, textAlign: 'left' },
+  '@media print': { display: 'grid' },
+} as const;
+
+/**
+ * The ranked valves under one head. The rows are laid out as grids so that they stack on a narrow page; the roles are
+ * said outright, because a table laid out otherwise is no longer one to every reader of screens.
+ */
 export function RankingRows({ rows, label }: RankingRowsProps) {
-  const headStyle = { color: 'text.secondary', fontSize: '0.8125rem', fontWeight: 500, lineHeight: 1.3 };
+  const table = useRef<HTMLTableElement>(null);
+  useRowKeys(table);
   return (
-    <Box onKeyDown={moveAmongRows}>
+    <Box
+      component="table"
+      role="table"
+      aria-label={label}
+      ref={table}
+      sx={{ display: 'block', borderSpacing: 0 }}
+    >
       <Box
-        aria-hidden
+        component="thead"
+        role="rowgroup"
         sx={{
-          ...rowColumns,
-          ...headStyle,
-          display: { xs: 'none', md: 'grid' },
-          alignItems: 'end',
+          display: 'block',
           position: 'sticky',
           top: 0,
           zIndex: 1,
           bgcolor: 'var(--tr-paper)',
-          borderBottom: '1px solid var(--tr-edge)',
-          pt: 0.5,
+          borderBottom: { md: '1px solid var(--tr-edge)' },
           '@media print': { position: 'static' },
         }}
       >
-        <Box sx={{ gridArea: 'rank', textAlign: 'right' }}>Rank</Box>
-        <Box sx={{ gridArea: 'valve' }}>Valve, service, area</Box>
-        <Box sx={{ gridArea: 'ridge', lineHeight: 1 }}>
-          <Box sx={{ pl: 1 }}>Time spent at each travel, %</Box>
-          <TravelRidgeAxis width={ridgeWidth} />
+        <Box component="tr" role="row" sx={headLook}>
+          <Box component="th" role="columnheader" sx={{ gridArea: 'rank', '&&': { textAlign: 'right' } }}>
+            Rank
+          </Box>
+          <Box component="th" role="columnheader" sx={{ gridArea: 'valve' }}>
+            Valve, service, area
+          </Box>
+          <Box component="th" role="columnheader" sx={{ gridArea: 'ridge', lineHeight: 1 }}>
+            <Box sx={{ pl: 1, pb: 0.25 }}>Time spent at each travel, %</Box>
+            <TravelRidgeAxis width={ridgeWidth} />
+          </Box>
+          <Box component="th" role="columnheader" sx={{ gridArea: 'glyph' }}>
+            Curve
+          </Box>
+          <Box component="th" role="columnheader" sx={{ gridArea: 'findings' }}>
+            Findings, the worst first
+          </Box>
+          <Box
+            component="th"
+            role="columnheader"
+            sx={{ gridArea: 'attention', '&&': { textAlign: 'right' } }}
+          >
+            Attention
+          </Box>
         </Box>
-        <Box sx={{ gridArea: 'glyph' }}>Curve</Box>
-        <Box sx={{ gridArea: 'findings' }}>What was found, with its severity</Box>
-        <Box sx={{ gridArea: 'attention', textAlign: 'right' }}>Attention</Box>
       </Box>
-      <Box component="ol" aria-label={label} sx={{ listStyle: 'none', m: 0, p: 0 }}>
+      <Box component="tbody" role="rowgroup" sx={{ display: 'block' }}>
         {rows.map((row) => (
           <RankingRow key={row.tag} row={row} />
         ))}
       </Box>
     </Box>
   );
-}
-
-const steps: Partial<Record<string, number>> = { j: 1, ArrowDown: 1, k: -1, ArrowUp: -1 };
-
-function moveAmongRows(event: KeyboardEvent<HTMLElement>): void {
-  const step = steps[event.key];
-  if (step === undefined || event.ctrlKey || event.metaKey || event.altKey) return;
-  const links = [...event.currentTarget.querySelectorAll<HTMLElement>('[data-row-link]')];
-  const at = links.indexOf(document.activeElement as HTMLElement);
-  if (at < 0) return;
-  event.preventDefault();
-  links[Math.min(links.length - 1, Math.max(0, at + step))]?.focus();
 }
