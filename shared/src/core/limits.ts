@@ -260,7 +260,7 @@ export const defaultLimits = {
     /** second rules of a kind */
     belowBandShare: { raise: 0.1, actNow: 0.5 },
     shortShare: { raise: 0.01, actNow: 0.1 },
-    driftChange: { raise: 0.04, actNow: 0.2 },
+    driftChange: { raise: 0.03, actNow: 0.2 },
     endReading: { raise: 1.5, actNow: 6 },
     lostMotionNoPosition: { raise: 2, actNow: 8 },
     reversalsPerDay: { raise: 3_000, actNow: 10_000 },

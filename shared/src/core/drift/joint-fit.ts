@@ -1,6 +1,6 @@
-import { huberWeight } from '../statistics/huber.js';
 import { median, medianInPlace } from '../statistics/quantile.js';
 import { weightedPolynomial } from '../statistics/regression.js';
+import { type Cells, joined, twoWay } from './two-way-fit.js';
 
 /** Windows a drift is worked out from, columns of one length. */
 export interface FitWindows {
@@ -21,11 +21,9 @@ export interface JointFit {
 
 /** Spread of a cell that no number of windows takes away: the trim's own ripple, in ln. */
 const cellFloor = 0.003;
-const huber = 1.345;
-const reweightings = 6;
-const backfits = 400;
-const settled = 1e-7;
 const curveDegree = 4;
+const passes = 12;
+const passSettled = 5e-4;
 
 /**
  * Fits travel and time together, L = curve(h) + change(segment), so that a valve which closes as it wears does not
@@ -34,7 +32,9 @@ const curveDegree = 4;
  * The handbook's backfitting of medians stalls where travel and time go together, as they do in a closed loop; here
  * cells of travel bin × segment keep their medians, and the two-way fit on them is weighted and robust (Huber's
  * weights, backfitted until settled). A quartic in h is taken out first so that nothing depends on where in a bin a
- * window lies, and once more after the first change is known.
+ * window lies, and again as the change becomes known. What a bin may differ from the quartic is drawn to zero as a
+ * trim's ripple is: in a short record each segment sees a bin or two, and free bins would let errors add up along
+ * the chain of segments.
  *
  * @param segment of each window, −1 where left out
  * @param binWidth % travel
@@ -59,15 +59,27 @@ export function jointFit(
   let change = new Float64Array(segments);
   let level = new Float64Array(bins);
   const smooth = new Float64Array(n);
-  for (let pass = 0; pass < 2; pass++) {
+  for (let pass = 0; pass < passes; pass++) {
     takeCurve(windows, segment, change, smooth);
     const cells = cellsOf(windows, smooth, bin, bins, segment, segments);
-    ({ change, level } = twoWay(joined(cells, segments), bins, segments));
+    const before = change;
+    ({ change, level } = twoWay(joined(cells, segments), { change, level }));
+    if (pass > 0 && largestMove(before, change) < passSettled) break;
   }
   const rest = new Float64Array(n);
   for (let i = 0; i < n; i++)
     rest[i] = (L[i] as number) - (smooth[i] as number) - (level[bin[i] as number] as number);
   return { change, rest };
+}
+
+function largestMove(before: Float64Array, after: Float64Array): number {
+  let most = 0;
+  const shift = median(after.map((v, i) => v - (before[i] as number)));
+  for (let s = 0; s < after.length; s++) {
+    const moved = Math.abs((after[s] as number) - (before[s] as number) - shift);
+    if (moved > most) most = moved;
+  }
+  return most;
 }
 
 /** The quartic of L on h with the change already known taken out, by window. */
@@ -98,14 +110,6 @@ function takeCurve(
     return;
   }
   smooth.fill(median(y));
-}
-
-interface Cells {
-  readonly count: number;
-  readonly bin: Int32Array;
-  readonly segment: Int32Array;
-  readonly value: Float64Array;
-  readonly weight: Float64Array;
 }
 
 /** Median of L less its curve in each travel bin × segment, weighted by how many windows stand behind it. */
@@ -156,109 +160,4 @@ function cellsOf(
     value: Float64Array.from(value),
     weight: Float64Array.from(size, (windows) => 1 / ((spread * spread) / windows + cellFloor ** 2)),
   };
-}
-
-/** Cells of travel bins seen in two segments or more, in the largest group of segments that share such bins. */
-function joined(cells: Cells, segments: number): Cells {
-  const parent = Int32Array.from({ length: segments }, (_, s) => s);
-  const root = (s: number): number => {
-    let r = s;
-    while (parent[r] !== r) r = parent[r] as number;
-    parent[s] = r;
-    return r;
-  };
-  const seen = new Map<number, number>();
-  const shared = new Set<number>();
-  for (let c = 0; c < cells.count; c++) {
-    const b = cells.bin[c] as number;
-    const s = cells.segment[c] as number;
-    const before = seen.get(b);
-    if (before === undefined) seen.set(b, s);
-    else {
-      shared.add(b);
-      parent[root(s)] = root(before);
-    }
-  }
-  const mass = new Map<number, number>();
-  for (let c = 0; c < cells.count; c++) {
-    if (!shared.has(cells.bin[c] as number)) continue;
-    const r = root(cells.segment[c] as number);
-    mass.set(r, (mass.get(r) ?? 0) + (cells.weight[c] as number));
-  }
-  let largest = -1;
-  for (const [r, m] of mass) if (largest < 0 || m > (mass.get(largest) ?? 0)) largest = r;
-  const kept: number[] = [];
-  for (let c = 0; c < cells.count; c++)
-    if (shared.has(cells.bin[c] as number) && root(cells.segment[c] as number) === largest) kept.push(c);
-  return {
-    count: kept.length,
-    bin: Int32Array.from(kept, (c) => cells.bin[c] as number),
-    segment: Int32Array.from(kept, (c) => cells.segment[c] as number),
-    value: Float64Array.from(kept, (c) => cells.value[c] as number),
-    weight: Float64Array.from(kept, (c) => cells.weight[c] as number),
-  };
-}
-
-/** Robust weighted two-way fit value = level(bin) + change(segment); NaN where a bin or segment has no cell. */
-function twoWay(
-  { count, bin, segment, value, weight }: Cells,
-  bins: number,
-  segments: number,
-): { change: Float64Array<ArrayBuffer>; level: Float64Array<ArrayBuffer> } {
-  const level = new Float64Array(bins);
-  const change = new Float64Array(segments);
-  const robust = weight.slice();
-  const away = new Float64Array(count);
-  for (let turn = 0; turn < reweightings; turn++) {
-    for (let back = 0; back < backfits; back++) {
-      averages(count, segment, bin, level, value, robust, change);
-      if (averages(count, bin, segment, change, value, robust, level) < settled) break;
-    }
-    for (let c = 0; c < count; c++) {
-      const rest =
-        (value[c] as number) - (level[bin[c] as number] as number) - (change[segment[c] as number] as number);
-      away[c] = Math.abs(rest) * Math.sqrt(weight[c] as number);
-    }
-    const scale = Math.max(1, 1.4826 * median(away));
-    for (let c = 0; c < count; c++)
-      robust[c] = (weight[c] as number) * huberWeight((away[c] as number) / scale, huber);
-  }
-  const seenBins = new Uint8Array(bins);
-  const seenSegments = new Uint8Array(segments);
-  for (let c = 0; c < count; c++) {
-    seenBins[bin[c] as number] = 1;
-    seenSegments[segment[c] as number] = 1;
-  }
-  return {
-    change: change.map((m, s) => (seenSegments[s] === 1 ? m : NaN)),
-    level: level.map((g, b) => (seenBins[b] === 1 ? g : NaN)),
-  };
-}
-
-/** Sets `into[group]` to the weighted mean of value less `other`; returns the largest change made. */
-function averages(
-  count: number,
-  group: Int32Array,
-  otherGroup: Int32Array,
-  other: Float64Array,
-  value: Float64Array,
-  weight: Float64Array,
-  into: Float64Array,
-): number {
-  const sum = new Float64Array(into.length);
-  const total = new Float64Array(into.length);
-  for (let c = 0; c < count; c++) {
-    const g = group[c] as number;
-    const w = weight[c] as number;
-    sum[g] = (sum[g] as number) + w * ((value[c] as number) - (other[otherGroup[c] as number] as number));
-    total[g] = (total[g] as number) + w;
-  }
-  let most = 0;
-  for (let g = 0; g < into.length; g++) {
-    if (!((total[g] as number) > 0)) continue;
-    const mean = (sum[g] as number) / (total[g] as number);
-    most = Math.max(most, Math.abs(mean - (into[g] as number)));
-    into[g] = mean;
-  }
-  return most;
 }

@@ -1,5 +1,6 @@
 import { type Prepared, valveState } from '../preparation/prepared.js';
 import { type SteadyWindows } from '../preparation/steady-windows.js';
+import { type History } from '../series.js';
 import { seededRandom } from '../statistics/seeded-random.js';
 
 /** A closed flow loop for tests: what ails the valve and what disturbs it. Travel in %, times in s. */
@@ -186,4 +187,25 @@ export function noWindows(source: SteadyWindows['source']): SteadyWindows {
     line: null,
     leftOut: {},
   };
+}
+
+/** The loop as a historian would have recorded it, sample by sample. */
+export function historyOf(prepared: Prepared): History {
+  const time = Float64Array.from({ length: prepared.count }, (_, i) => prepared.start + i * prepared.step);
+  const good = new Uint8Array(prepared.count).fill(1);
+  const roles = [
+    'demand',
+    'position',
+    'flow',
+    'upstreamPressure',
+    'downstreamPressure',
+    'setPoint',
+    'processValue',
+  ] as const;
+  return Object.fromEntries(
+    roles.flatMap((role) => {
+      const value = prepared[role];
+      return value === null ? [] : [[role, { time, value, good }]];
+    }),
+  );
 }
