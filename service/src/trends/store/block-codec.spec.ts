@@ -47,7 +47,7 @@ describe('a block of samples', () => {
   ])('comes back to the bit: %s', (_, value) => {
     fc.assert(
       fc.property(column(value), (rows) => {
-        const series = build(rows as [number, number, number][], 1000);
+        const series = build(rows, 1000);
         expectSame(series, decodeBlock(encodeBlock(series), series.time.length));
       }),
     );

@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { type Series, type Span } from '@tailrace/shared/core/series';
-import { DataSource, EntityManager, In, LessThan, MoreThanOrEqual } from 'typeorm';
+import { DataSource, EntityManager, In, LessThan, LessThanOrEqual, MoreThanOrEqual } from 'typeorm';
 import { Transactions } from '../../platform/database/transactions.js';
 import { decodeBlock, decodeInto } from './block-codec.js';
 import { HistorianTagEntity } from './historian-tag.entity.js';
@@ -87,13 +87,13 @@ export class SampleStore {
       .addSelect('MAX(block.toTime)', 'to')
       .where('tag.name = :tag', { tag })
       .getRawOne<{ from: number | null; to: number | null }>();
-    return found?.from != null && found.to != null ? { from: found.from, to: found.to } : null;
+    return found && found.from !== null && found.to !== null ? { from: found.from, to: found.to } : null;
   }
 
   private async place(manager: EntityManager, staged: StagedBlockEntity): Promise<void> {
     const { tagId, fromTime, toTime } = staged;
     const overlapping = await manager.find(SampleBlockEntity, {
-      where: { tagId, toTime: MoreThanOrEqual(fromTime), fromTime: LessThan(toTime + 1e-9) },
+      where: { tagId, toTime: MoreThanOrEqual(fromTime), fromTime: LessThanOrEqual(toTime) },
       order: { fromTime: 'ASC' },
     });
     const same = overlapping.some(

@@ -1,0 +1,16 @@
+import { type PresentedAssessment } from '@tailrace/shared/contracts/assessments';
+import { type ValveForm } from '@tailrace/shared/contracts/valves';
+import { type Series, type SignalRole, type Span } from '@tailrace/shared/core/series';
+import { type Site } from '@tailrace/shared/core/units/unit';
+
+/** One valve and its recorded signals; the columns are handed over, not copied. */
+export interface AssessTask {
+  readonly form: ValveForm;
+  readonly recorded: Partial<Record<SignalRole, Series>>;
+  readonly span: Span;
+  readonly site: Site;
+}
+
+export type AssessOutcome =
+  | { readonly kind: 'assessed'; readonly result: PresentedAssessment; readonly took: number }
+  | { readonly kind: 'units'; readonly reason: string };
