@@ -7,6 +7,7 @@ import { PlatformModule } from './platform/platform.module.js';
 import { AssessmentsModule } from './assessments/assessments.module.js';
 import { FindingsModule } from './findings/findings.module.js';
 import { RankingModule } from './ranking/ranking.module.js';
+import { OperationsModule } from './operations/operations.module.js';
 import { RunsModule } from './runs/runs.module.js';
 import { TrendsModule } from './trends/trends.module.js';
 import { ValvesModule } from './valves/valves.module.js';
@@ -28,6 +29,7 @@ export class AppModule {
         FindingsModule,
         RankingModule,
         RunsModule,
+        OperationsModule,
       ],
     };
   }

@@ -1,13 +1,21 @@
 import { type AddressInfo } from 'node:net';
 import { createApp } from './create-app.js';
+import { DemoPlant } from './operations/demo-plant.js';
 import { ConfigError, readConfig } from './platform/config.js';
 
 async function start(): Promise<void> {
   const config = readConfig(process.env);
   const app = await createApp(config);
+  await app.init();
+  const say = (line: string) => process.stdout.write(`${line}\n`);
+  const accounts = config.demo ? await app.get(DemoPlant).bringIn(say) : null;
   await app.listen(config.port, config.host);
   const address = app.getHttpServer().address() as AddressInfo;
-  process.stdout.write(`Tailrace is at http://localhost:${address.port}\n`);
+  say(`\nTailrace is at http://localhost:${address.port}\n`);
+  if (accounts) {
+    say(`Demo accounts, all with the password “${config.demoPassword}”:`);
+    for (const { role, email } of accounts) say(`  ${role.padEnd(9)} ${email}`);
+  }
 }
 
 start().catch((error: unknown) => {

@@ -96,9 +96,11 @@ export class RunsService {
     return { ...(await this.summary(actor, run)), outcomes };
   }
 
-  /** Stops a run: valves not yet worked off stay as they were. */
+  /** Stops a run: valves not yet worked off stay as they were. Only who sees all its valves may. */
   async stop(actor: Actor, id: string): Promise<RunDetail> {
     const run = await this.one(actor, id);
+    const all = await this.database.getRepository(RunValveEntity).countBy({ runId: id });
+    if ((await this.outcomes(actor, id)).length < all) throw new Problem('not-allowed');
     await this.transactions.run(async (manager) => {
       const stopped = await manager.update(
         AnalysisRunEntity,

@@ -30,7 +30,7 @@ export async function receiveUpload<T>(
       return;
     }
     // A part may come without a file name; the types do not say so.
-    name = (filename) ?? '';
+    name = filename ?? '';
     receiving = receive(bytes);
     receiving.catch(() => bytes.resume());
   });
