@@ -25,6 +25,9 @@ export interface SplitPair {
 /** Samples a split looks at: more say nothing new, since neighbours 10 s apart repeat each other. */
 const looks = 200_000;
 const turns = 4;
+/** Slow is judged over at least this many scans. */
+const slowScans = 3;
+const looksBack = 6;
 
 /** Room for the samples of a split of a record of this many grid points; reused between its splits. */
 export function slowSamplesFor(count: number): SlowSamples {
@@ -91,7 +94,10 @@ function slowSamples(
   room: SlowSamples,
 ): { samples: SlowSamples; seen: number; slow: number } {
   const rules = limits.movement;
-  const back = Math.max(1, Math.round(rules.slowSeconds / grid.step));
+  // at a slow scan a lag is known to half a scan only: the reference must then be slower still
+  const back = Math.max(1, Math.round(Math.max(rules.slowSeconds, slowScans * grid.step) / grid.step));
+  // looked at between as well: a quick oscillation would pass for rest at its turning points
+  const between = Math.max(1, Math.floor(back / looksBack));
   let n = 0;
   let seen = 0;
   let slow = 0;
@@ -106,7 +112,7 @@ function slowSamples(
       if (up ? r > furthest : r < furthest) furthest = r;
       if (i % stride !== 0) continue;
       seen++;
-      if (!(Math.abs(r - (reference[i - back] as number)) <= rules.slowMove)) continue;
+      if (!isSlow(reference, i, back, between, rules.slowMove)) continue;
       slow++;
       const reach = Math.abs(furthest - pivot);
       if (reach <= rules.directionNeed || Math.abs(furthest - r) > rules.directionRetreat) continue;
@@ -122,6 +128,13 @@ function slowSamples(
     }
   }
   return { samples: { ...room, count: n }, seen, slow };
+}
+
+function isSlow(reference: Float64Array, i: number, back: number, between: number, move: number): boolean {
+  const r = reference[i] as number;
+  for (let j = i - back; j < i; j += between)
+    if (!(Math.abs(r - (reference[j] as number)) <= move)) return false;
+  return true;
 }
 
 /** Smallest share of the median slope a local slope may have: a flat end must not blow its bin up. */

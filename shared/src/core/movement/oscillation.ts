@@ -24,7 +24,7 @@ interface Found {
  *
  * Each octave of periods is judged by itself; only blocks whose periods agree within `oscillationSpread` count as
  * one oscillation, since noise passed through a band swings too, but with another period each time (our addition).
- * The octave with the largest share speaks. From `stepFreeCell`s on, periods are sought in the travel freed of steps.
+ * The octave with the largest share speaks. Periods of 16 step-free cells and more are sought in the travel freed of steps.
  *
  * @param usable 1 where the valve was in service and not held by hand
  * @param sticking whether the stem jumps (§6.4): then the valve is the cause

@@ -18,7 +18,7 @@ const medianFactor = 1.2533;
  * `jumpDemandRatio` times the demand's own change over the same samples.
  *
  * @param usable 1 where the valve was in service
- * @returns a refusal without position and demand, or where either was sampled too slowly to see a jump
+ * @returns a refusal without position and demand, or where the position was sampled too slowly to see a jump
  * Source: methods.md §6.4
  */
 export function restJumpRest(prepared: Prepared, usable: Uint8Array, limits: Limits): Movement['jumps'] {
@@ -26,7 +26,8 @@ export function restJumpRest(prepared: Prepared, usable: Uint8Array, limits: Lim
   const { position: x, demand: u, step } = prepared;
   if (x === null) return cannotJudge('demand-only');
   if (u === null) return cannotJudge('no-demand');
-  const spacing = Math.max(prepared.spacing.travel, prepared.spacing.demand ?? 0, step);
+  // demand may be slower: between its samples it is a line, and only its change over the jump is asked for
+  const spacing = Math.max(prepared.spacing.travel, step);
   if (spacing > rules.jumpScan * 1.01)
     return cannotJudge('sampled-too-slowly', { spacing, needed: rules.jumpScan });
   const rest = Math.max(2, Math.round(rules.restSeconds / step));

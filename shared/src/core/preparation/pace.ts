@@ -14,7 +14,7 @@ const looks = 4_096;
 /**
  * The pace of a signal, from at most 4096 pairs of neighbours spread over the record.
  *
- * The scan is the 10th percentile of spacing: a compressed archive stores neighbours only while the signal
+ * The scan is the 2nd percentile of spacing: a compressed archive stores neighbours only while the signal
  * moves, so its median says how quiet the plant was and its low end how often it was looked at (our choice).
  *
  * @param time s, strictly ascending
@@ -31,7 +31,7 @@ export function paceOf(time: Float64Array): Pace {
   }
   spacing.sort();
   return {
-    scan: sortedQuantile(spacing, 0.1),
+    scan: sortedQuantile(spacing, 0.02),
     median: sortedQuantile(spacing, 0.5),
     longest: sortedQuantile(spacing, 0.99),
   };
