@@ -1,6 +1,7 @@
 import { type AddressInfo } from 'node:net';
 import { createApp } from './create-app.js';
 import { DemoPlant } from './operations/demo-plant.js';
+import { FirstStart } from './operations/first-start.js';
 import { ConfigError, readConfig } from './platform/config.js';
 
 async function start(): Promise<void> {
@@ -9,6 +10,7 @@ async function start(): Promise<void> {
   await app.init();
   const say = (line: string) => process.stdout.write(`${line}\n`);
   const accounts = config.demo ? await app.get(DemoPlant).bringIn(say) : null;
+  if (!config.demo) await app.get(FirstStart).prepare(say);
   await app.listen(config.port, config.host);
   const address = app.getHttpServer().address() as AddressInfo;
   say(`\nTailrace is at http://localhost:${address.port}\n`);

@@ -5,9 +5,10 @@ import { RunsModule } from '../runs/runs.module.js';
 import { TrendsModule } from '../trends/trends.module.js';
 import { ValvesModule } from '../valves/valves.module.js';
 import { DemoPlant } from './demo-plant.js';
+import { FirstStart } from './first-start.js';
 
 @Module({
   imports: [FilesModule, PeopleModule, ValvesModule, TrendsModule, RunsModule],
-  providers: [DemoPlant],
+  providers: [DemoPlant, FirstStart],
 })
 export class OperationsModule {}

@@ -1,9 +1,15 @@
 import { Injectable } from '@nestjs/common';
 import { InjectRepository } from '@nestjs/typeorm';
-import { type Area, type Me } from '@tailrace/shared/contracts/people';
+import {
+  type Area,
+  type AreaDraft,
+  type Me,
+  type Person,
+  type PersonDraft,
+} from '@tailrace/shared/contracts/people';
 import { type Actor, type Role } from '@tailrace/shared/contracts/policy';
 import { randomUUID } from 'node:crypto';
-import { Repository } from 'typeorm';
+import { In, Repository } from 'typeorm';
 import { AuditService } from '../audit/audit.service.js';
 import { Clock } from '../platform/clock.js';
 import { Transactions } from '../platform/database/transactions.js';
@@ -52,6 +58,38 @@ export class PeopleService {
       areas: await this.areasOf(actor),
       site: { name: site.name, zone: site.zone, coefficientUnit: site.coefficientUnit },
     };
+  }
+
+  /** Adds an area to the site. Its code must be new. */
+  async addArea(
+    actor: { readonly id: string | null; readonly name: string },
+    draft: AreaDraft,
+  ): Promise<Area> {
+    const { id: siteId } = await this.site();
+    return this.transactions.run(async (manager) => {
+      if (await manager.existsBy(AreaEntity, { siteId, code: draft.code }))
+        throw new Problem('already-exists');
+      const { id, code, name } = await manager.save(AreaEntity, { id: randomUUID(), siteId, ...draft });
+      await this.audit.record(manager, actor, {
+        action: 'added',
+        subjectType: 'area',
+        subjectId: id,
+        areaId: id,
+        after: { code, name },
+      });
+      return { id, code, name };
+    });
+  }
+
+  /** Adds a person with the areas named; null: all of them. */
+  async addPerson(actor: Actor, { areaIds, ...draft }: PersonDraft): Promise<Person> {
+    const areas = areaIds && (await this.areas.findBy({ id: In(areaIds) }));
+    if (areas && areas.length < new Set(areaIds).size)
+      throw new Problem('invalid-input', null, [
+        { pointer: '/areaIds', detail: 'One of these areas does not exist.' },
+      ]);
+    const { id, name, email, role, allAreas } = await this.add(actor, { ...draft, areas });
+    return { id, name, email, role, areaIds: allAreas ? null : (areas ?? []).map((area) => area.id) };
   }
 
   async areasOf(actor: Pick<Actor, 'areas'>): Promise<Area[]> {

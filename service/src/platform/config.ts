@@ -2,6 +2,7 @@ import { randomBytes } from 'node:crypto';
 import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { join, resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
+import { IANAZone } from 'luxon';
 import { z } from 'zod';
 
 /** The service's settings. Everything has a default that works; the environment changes it. */
@@ -24,6 +25,12 @@ export interface Config {
   /** bring in the demo plant when the database is empty */
   readonly demo: boolean;
   readonly demoPassword: string;
+  /** the site a first start without the demo plant makes, and who may sign in to it */
+  readonly firstStart: {
+    readonly siteName: string;
+    readonly zone: string;
+    readonly admin: { readonly email: string; readonly password: string } | null;
+  };
 }
 
 export const CONFIG = Symbol('config');
@@ -49,6 +56,13 @@ const environment = z.object({
   MAX_UPLOAD_MB: wholeNumber(1, 1_000_000).default(4096),
   WORKERS: wholeNumber(1, 64).default(2),
   DEMO: onOff.default('off'),
+  SITE_NAME: z.string().min(1).max(60).default('Site'),
+  SITE_ZONE: z
+    .string()
+    .refine((zone) => IANAZone.isValidZone(zone), 'must be a zone such as Europe/Vienna')
+    .default('UTC'),
+  ADMIN_EMAIL: z.email('must be an e-mail address').optional(),
+  ADMIN_PASSWORD: z.string().min(10, 'must have 10 characters or more').optional(),
   DEMO_PASSWORD: z.string().min(10, 'must have 10 characters or more').default('tailrace-demo'),
 });
 
@@ -85,6 +99,14 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
     workers: values.WORKERS,
     demo: values.DEMO === 'on',
     demoPassword: values.DEMO_PASSWORD,
+    firstStart: {
+      siteName: values.SITE_NAME,
+      zone: values.SITE_ZONE,
+      admin:
+        values.ADMIN_EMAIL && values.ADMIN_PASSWORD
+          ? { email: values.ADMIN_EMAIL.toLowerCase(), password: values.ADMIN_PASSWORD }
+          : null,
+    },
   };
 }
 

@@ -37,3 +37,28 @@ export const session = z.object({
   me,
 });
 export type Session = z.infer<typeof session>;
+
+export const areaDraft = z.object({
+  code: z
+    .string()
+    .trim()
+    .regex(/^[A-Za-z0-9-]{1,12}$/, 'A code has 1 to 12 letters, digits or dashes.'),
+  name: z.string().trim().min(1, 'Give the area a name.').max(60, 'A name has 60 characters at most.'),
+});
+export type AreaDraft = z.infer<typeof areaDraft>;
+
+export const personDraft = z.object({
+  name: z.string().trim().min(1, 'Give the name.').max(100, 'A name has 100 characters at most.'),
+  email: z.email('Give an e-mail address.').trim().toLowerCase().max(254),
+  role,
+  /** null: all areas */
+  areaIds: z.array(z.uuid()).max(500).nullable(),
+  password: z
+    .string()
+    .min(10, 'A password has 10 characters or more.')
+    .max(200, 'A password has 200 characters at most.'),
+});
+export type PersonDraft = z.infer<typeof personDraft>;
+
+export const person = personDraft.omit({ password: true }).extend({ id: z.uuid() });
+export type Person = z.infer<typeof person>;
