@@ -25,6 +25,7 @@ export const routes: RouteObject[] = [
         ErrorBoundary: RouteFailed,
         children: [
           { index: true, lazy: () => import('./routes/ranking') },
+          { path: 'valves/:tag', lazy: () => import('./routes/valve') },
           { path: 'me', lazy: () => import('./routes/me') },
           { path: 'design', lazy: () => import('./routes/design') },
           { path: '*', lazy: () => import('./routes/not-found') },

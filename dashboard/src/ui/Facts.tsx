@@ -3,7 +3,9 @@ import { type ReactNode } from 'react';
 
 /** What is known, name by name; what is not known stays out. */
 export function Facts({ facts }: { facts: readonly (readonly [name: string, fact: ReactNode])[] }) {
-  const known = facts.filter(([, fact]) => fact !== null && fact !== undefined && fact !== '');
+  const known = facts.filter(
+    ([, fact]) => fact !== null && fact !== undefined && fact !== false && fact !== '',
+  );
   return (
     <Box
       component="dl"

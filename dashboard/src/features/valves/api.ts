@@ -1,6 +1,6 @@
 import { keepPreviousData, queryOptions } from '@tanstack/react-query';
-import { type StoredAssessment } from '@tailrace/shared/contracts/assessments';
-import { type LivingFinding } from '@tailrace/shared/contracts/findings';
+import { type AssessmentPage, type StoredAssessment } from '@tailrace/shared/contracts/assessments';
+import { type FindingPage } from '@tailrace/shared/contracts/findings';
 import { type Area } from '@tailrace/shared/contracts/people';
 import { type Valve, type ValvePage, type ValveQuery } from '@tailrace/shared/contracts/valves';
 import { api } from '../../lib/api-client';
@@ -27,20 +27,10 @@ export const valveQuery = (tag: string) =>
     queryFn: ({ signal }) => api.get<Valve>(of(tag), { signal }),
   });
 
-/** One assessment of a valve's history of assessments. */
-export interface AssessmentEntry {
-  readonly id: string;
-  readonly runNumber: number;
-  readonly assessedAt: string;
-  readonly judged: boolean;
-  readonly attention: number | null;
-}
-
 export const assessmentsQuery = (tag: string) =>
   queryOptions({
     queryKey: ['assessments', 'of', tag],
-    queryFn: ({ signal }) =>
-      api.get<{ rows: AssessmentEntry[]; total: number }>(`${of(tag)}/assessments`, { signal }),
+    queryFn: ({ signal }) => api.get<AssessmentPage>(`${of(tag)}/assessments`, { signal }),
   });
 
 /** The latest assessment of a valve, or the one chosen. */
@@ -54,6 +44,5 @@ export const assessmentQuery = (tag: string, id: string | undefined) =>
 export const findingsOfValveQuery = (tag: string) =>
   queryOptions({
     queryKey: ['findings', 'of', tag],
-    queryFn: ({ signal }) =>
-      api.get<{ rows: LivingFinding[]; total: number }>(`${of(tag)}/findings`, { signal }),
+    queryFn: ({ signal }) => api.get<FindingPage>(`${of(tag)}/findings`, { signal }),
   });
