@@ -41,6 +41,12 @@ describe('consequences', () => {
     expect(explained([raised('Passing when shut'), off(60)])['Off characteristic']).toBeNull();
   });
 
+  it('let a stem that rests in its band explain a position that stands still, but not a flow', () => {
+    const frozen = (flowHours: number) => raised('Frozen signal', { flowHours, positionHours: 3 });
+    expect(explained([raised('Sticking'), frozen(0)])['Frozen signal']).toBe('Sticking');
+    expect(explained([raised('Lost motion'), frozen(5)])['Frozen signal']).toBeNull();
+  });
+
   it('may chain, so that only the first cause is counted', () => {
     const found = explained([raised('Sticking'), raised('Hunting'), raised('Excess movement')]);
     expect(found).toEqual({ Sticking: null, Hunting: 'Sticking', 'Excess movement': 'Hunting' });

@@ -11,7 +11,14 @@ const onlyWhere: Partial<Record<FindingKind, (explained: Finding) => boolean>> =
     const highest = evidence.highestBeyond ?? evidence.worstTravel ?? null;
     return highest !== null && highest < lowTravel;
   },
+  // a stem that rests inside its band stands to the digit while demand moves: no transmitter has failed
+  Sticking: restsInItsBand,
+  'Lost motion': restsInItsBand,
 };
+
+function restsInItsBand({ kind, evidence }: Finding): boolean {
+  return kind !== 'Frozen signal' || evidence.flowHours === 0;
+}
 
 /**
  * Marks findings that another one explains: they are shown struck through and not counted.

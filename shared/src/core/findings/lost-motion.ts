@@ -8,7 +8,7 @@ import { type FindingRule, type Measure } from './finding-rule.js';
 export const lostMotion: FindingRule = {
   kind: 'Lost motion',
   weight: 0.85,
-  explains: [],
+  explains: ['Frozen signal'],
   measure({ movement, travelSource, pressureDrop }, _sheet, limits) {
     if (movement === null) return [];
     const { demandToPosition, positionToFlow, demandToFlow, jumps } = movement;

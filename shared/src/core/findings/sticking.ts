@@ -4,7 +4,7 @@ import { type FindingRule } from './finding-rule.js';
 export const sticking: FindingRule = {
   kind: 'Sticking',
   weight: 1,
-  explains: ['Hunting'],
+  explains: ['Hunting', 'Frozen signal'],
   measure({ movement, resolution }, _sheet, limits) {
     if (movement === null) return [];
     const { demandToPosition: split, jumps } = movement;
