@@ -26,6 +26,9 @@ export const routes: RouteObject[] = [
         children: [
           { index: true, lazy: () => import('./routes/ranking') },
           { path: 'valves/:tag', lazy: () => import('./routes/valve') },
+          { path: 'trends', lazy: () => import('./routes/trends') },
+          { path: 'trends/new', lazy: () => import('./routes/new-trend') },
+          { path: 'trends/:id', lazy: () => import('./routes/trend') },
           { path: 'me', lazy: () => import('./routes/me') },
           { path: 'design', lazy: () => import('./routes/design') },
           { path: '*', lazy: () => import('./routes/not-found') },

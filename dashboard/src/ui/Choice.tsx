@@ -2,6 +2,8 @@ import { MenuItem, TextField } from '@mui/material';
 
 interface ChoiceProps {
   label: string;
+  /** said instead of a label where a table's head names the column */
+  ariaLabel?: string;
   value: string | undefined;
   options: readonly { value: string; word: string }[];
   /** what no choice is called: "all areas"; left out where one must be chosen */
@@ -11,7 +13,7 @@ interface ChoiceProps {
 }
 
 /** One choice of a few, in a line of filters. */
-export function Choice({ label, value, options, none, onChoose, width = 170 }: ChoiceProps) {
+export function Choice({ label, ariaLabel, value, options, none, onChoose, width = 170 }: ChoiceProps) {
   const known = options.some((option) => option.value === value);
   return (
     <TextField
@@ -20,7 +22,10 @@ export function Choice({ label, value, options, none, onChoose, width = 170 }: C
       value={known ? value : ''}
       onChange={(event) => onChoose(event.target.value || undefined)}
       sx={{ width }}
-      slotProps={{ inputLabel: { shrink: true }, select: { displayEmpty: true } }}
+      slotProps={{
+        inputLabel: { shrink: true },
+        select: { displayEmpty: true, ...(ariaLabel && { SelectDisplayProps: { 'aria-label': ariaLabel } }) },
+      }}
     >
       {none !== undefined && <MenuItem value="">{none}</MenuItem>}
       {options.map((option) => (
