@@ -6,6 +6,7 @@ import {
   type ValvePage,
   type ValveQuery,
 } from '@tailrace/shared/contracts/valves';
+import { criticalities } from '@tailrace/shared/core/data-sheet';
 import { randomUUID } from 'node:crypto';
 import { DataSource, EntityManager, type SelectQueryBuilder } from 'typeorm';
 import { AuditService } from '../audit/audit.service.js';
@@ -23,8 +24,12 @@ const sortColumns: Record<ValveQuery['sort'], string> = {
   tag: 'valve.tag',
   area: 'area.code',
   service: 'valve.service',
-  criticality: 'valve.criticality',
+  criticality: 'criticality_order',
 };
+
+const criticalityOrder = `CASE valve.criticality ${criticalities
+  .map((criticality, order) => `WHEN '${criticality}' THEN ${order}`)
+  .join(' ')} END`;
 
 @Injectable()
 export class ValvesService {
@@ -42,10 +47,10 @@ export class ValvesService {
       found.andWhere("(valve.tag LIKE :like ESCAPE '\\' OR valve.service LIKE :like ESCAPE '\\')", {
         like: `%${query.q.replace(/[\\%_]/g, '\\$&')}%`,
       });
-    const direction = query.direction === 'asc' ? 'ASC' : 'DESC';
+    if (query.sort === 'criticality') found.addSelect(criticalityOrder, sortColumns.criticality);
+    found.orderBy(sortColumns[query.sort], query.direction === 'asc' ? 'ASC' : 'DESC');
+    if (query.sort !== 'tag') found.addOrderBy('valve.tag', 'ASC');
     const [valves, total] = await found
-      .orderBy(sortColumns[query.sort], direction)
-      .addOrderBy('valve.tag', 'ASC')
       .skip(query.page * query.pageSize)
       .take(query.pageSize)
       .getManyAndCount();
