@@ -34,3 +34,41 @@ export function utcTime(instant: string | null): string {
   const time = Date.parse(instant ?? '');
   return Number.isNaN(time) ? '' : `${new Date(time).toISOString().slice(0, 19).replace('T', ' ')} UTC`;
 }
+
+/**
+ * The instant a calendar day begins in a zone.
+ *
+ * @param day "2026-11-30"
+ * @returns ISO 8601 in UTC
+ * @example startOfDay('2026-11-30', 'Europe/Zurich') // '2026-11-29T23:00:00.000Z'
+ */
+export function startOfDay(day: string, zone: string): string {
+  const asUtc = Date.parse(`${day}T00:00:00Z`);
+  // a second look, because the offset may change between the guess and the day's begin
+  const guess = asUtc - offsetAt(asUtc, zone);
+  return new Date(asUtc - offsetAt(guess, zone)).toISOString();
+}
+
+/** Zone's wall clock less UTC at an instant, both ms. */
+function offsetAt(instant: number, zone: string): number {
+  const parts = new Intl.DateTimeFormat('en-US', {
+    timeZone: zone,
+    hourCycle: 'h23',
+    year: 'numeric',
+    month: 'numeric',
+    day: 'numeric',
+    hour: 'numeric',
+    minute: 'numeric',
+    second: 'numeric',
+  }).formatToParts(instant);
+  const part = (type: Intl.DateTimeFormatPartTypes) => Number(parts.find((one) => one.type === type)?.value);
+  const wall = Date.UTC(
+    part('year'),
+    part('month') - 1,
+    part('day'),
+    part('hour'),
+    part('minute'),
+    part('second'),
+  );
+  return wall - Math.floor(instant / 1000) * 1000;
+}
