@@ -1,0 +1,238 @@
+import { type Collection, type DemoValve } from './demo-valve.js';
+
+/** An invented plant that makes alginate from kelp. Every name in it is made up. */
+export const site = {
+  name: 'Vardmire Kelp Works',
+  zone: 'Europe/Oslo',
+  coefficientUnit: 'Kv',
+  barometricPressure: 101.325,
+  nightlyAt: '02:00',
+};
+
+export const areas = [
+  { code: 'WASH', name: 'Washing and milling' },
+  { code: 'EXTR', name: 'Extraction' },
+  { code: 'PREC', name: 'Precipitation' },
+  { code: 'UTIL', name: 'Utilities' },
+];
+
+export const collections: Readonly<Record<string, Collection>> = {
+  WASH: { scan: 120, tolerance: 0, days: 15 },
+  EXTR: { scan: 10, tolerance: 0.002, days: 7 },
+  PREC: { scan: 180, tolerance: 0, days: 15 },
+  UTIL: { scan: 60, tolerance: 0.002, days: 15 },
+};
+
+const day = 86_400;
+const linear = { kind: 'linear', parameter: null } as const;
+/** the extraction's historian keeps no set points */
+const withoutSetPoint = ['demand', 'position', 'flow', 'upstreamPressure', 'downstreamPressure'] as const;
+const withoutPressures = ['demand', 'position', 'flow', 'setPoint'] as const;
+
+export const valves: readonly DemoValve[] = [
+  {
+    area: 'WASH',
+    tag: 'FV-1101',
+    service: 'Wash water to drum 1',
+    shows: 'Healthy: equal percentage, works between a third and three quarters of its travel.',
+  },
+  {
+    area: 'WASH',
+    tag: 'FV-1102',
+    service: 'Brine make-up',
+    shows: 'Healthy: linear.',
+    valve: { ...linear, ratedCoefficient: 32 },
+    line: { lossShare: 0.3 },
+    loop: { duty: { kind: 'steps', low: 25, high: 70 } },
+  },
+  {
+    area: 'WASH',
+    tag: 'FV-1103',
+    service: 'Rinse spray header',
+    shows: 'Oversized: hardly ever above a quarter of its travel.',
+    valve: { ...linear, ratedCoefficient: 80 },
+    line: { lossShare: 0.3 },
+    loop: { duty: { kind: 'steps', low: 5, high: 20 } },
+  },
+  {
+    area: 'WASH',
+    tag: 'FV-1104',
+    service: 'Belt press filtrate',
+    shows: 'Undersized: lives above its working band.',
+    valve: { ratedCoefficient: 20 },
+    loop: { duty: { kind: 'steps', low: 72, high: 99 } },
+    sheet: { criticality: 'high' },
+  },
+  {
+    area: 'WASH',
+    tag: 'FV-1105',
+    service: 'Screw feed sump',
+    shows: 'Off characteristic: the sheet says equal percentage, the trim is linear.',
+    valve: { ...linear, ratedCoefficient: 40 },
+    line: { lossShare: 0.3 },
+    loop: { duty: { kind: 'steps', low: 25, high: 80 } },
+    sheet: { characteristic: 'equal percentage', rangeability: 50 },
+  },
+  {
+    area: 'WASH',
+    tag: 'FV-1106',
+    service: 'Seawater intake strainer flush',
+    shows: 'Gained capacity: a fifth more than its sheet, as of a worn trim.',
+    valve: { ratedCoefficient: 60 },
+    sheet: { ratedCoefficient: 50, criticality: 'low' },
+  },
+  {
+    area: 'EXTR',
+    tag: 'FV-2201',
+    service: 'Soda liquor to digester 1',
+    roles: withoutSetPoint,
+    shows: 'Sticking: the stem rests, then jumps.',
+    valve: { stick: { S: 4, J: 2 } },
+    loop: { duty: { kind: 'cascade', low: 30, high: 70 } },
+    sheet: { criticality: 'high' },
+  },
+  {
+    area: 'EXTR',
+    tag: 'FV-2202',
+    service: 'Extraction water',
+    roles: withoutSetPoint,
+    shows: 'Lost motion: 3 % of demand is lost at each reversal, without jumps.',
+    valve: { stick: { S: 3, J: 0 } },
+    loop: { duty: { kind: 'cascade', low: 30, high: 70 } },
+  },
+  {
+    area: 'EXTR',
+    tag: 'FV-2203',
+    service: 'Digester jacket hot water',
+    roles: withoutSetPoint,
+    shows: 'Hunting: the loop is tuned too fast for it.',
+    loop: { duty: { kind: 'base load', low: 40, high: 60 }, swing: { period: 420, amplitude: 0.06 } },
+  },
+  {
+    area: 'EXTR',
+    tag: 'FV-2204',
+    service: 'Digester recirculation',
+    roles: withoutSetPoint,
+    shows: 'Lost motion: 3 % of play between stem and plug.',
+    valve: { play: 3 },
+    loop: { duty: { kind: 'cascade', low: 30, high: 70 } },
+  },
+  {
+    area: 'EXTR',
+    tag: 'FV-2205',
+    service: 'Filter aid dosing',
+    roles: withoutSetPoint,
+    shows: 'Healthy: equal percentage at ten-second samples.',
+    valve: { ratedCoefficient: 12.5, parameter: 30 },
+    loop: { duty: { kind: 'cascade', low: 30, high: 70 } },
+  },
+  {
+    area: 'EXTR',
+    tag: 'FV-2206',
+    service: 'Hot liquor return',
+    roles: withoutSetPoint,
+    shows: 'Position mismatch: the stem reports 4 % more than is asked of it.',
+    valve: { positionError: 4 },
+    loop: { duty: { kind: 'steps', low: 30, high: 70 } },
+  },
+  {
+    area: 'PREC',
+    tag: 'FV-3301',
+    service: 'Acid to precipitator',
+    shows: 'Lost capacity: a quarter less than its sheet, as of scale.',
+    valve: { ratedCoefficient: 18.75 },
+    sheet: { ratedCoefficient: 25, criticality: 'high' },
+  },
+  {
+    area: 'PREC',
+    tag: 'FV-3302',
+    service: 'Calcium brine',
+    shows: 'Healthy: quick opening, in a line with little loss.',
+    valve: { kind: 'quick opening', parameter: 2, ratedCoefficient: 16 },
+    line: { lossShare: 0.1 },
+    loop: { duty: { kind: 'steps', low: 18, high: 70 } },
+  },
+  {
+    area: 'PREC',
+    tag: 'FV-3303',
+    service: 'Fibre wash',
+    shows: 'No pressures are recorded: only the installed characteristic can be shown.',
+    roles: withoutPressures,
+  },
+  {
+    area: 'PREC',
+    tag: 'FV-3304',
+    service: 'Curd transfer dilution',
+    shows: 'Pinned at limit: left wide open for the whole record.',
+    loop: { duty: { kind: 'constant demand', low: 100, high: 100 } },
+  },
+  {
+    area: 'PREC',
+    tag: 'FV-3305',
+    service: 'Flash condensate let-down',
+    shows: 'Choked service: hot condensate let down close to its vapour pressure.',
+    valve: { FL: 0.7, ratedCoefficient: 20 },
+    line: { dropShut: 900, destination: 180, vapourPressure: 143, density: 951, lossShare: 0.3 },
+  },
+  {
+    area: 'PREC',
+    tag: 'FV-3306',
+    service: 'Acid emergency isolation',
+    shows: 'A trip valve: listed apart, never ranked.',
+    loop: { duty: { kind: 'base load', low: 45, high: 65 } },
+    sheet: { trip: true, criticality: 'high' },
+  },
+  {
+    area: 'UTIL',
+    tag: 'FV-4401',
+    service: 'Boiler feed make-up',
+    shows: 'Passing when shut: 3 % of its rated coefficient flows in three shut spells.',
+    valve: { passing: 0.03 },
+    loop: {
+      shutdowns: [
+        { from: 2.2 * day, to: 2.5 * day },
+        { from: 6.1 * day, to: 6.5 * day },
+        { from: 11.3 * day, to: 11.6 * day },
+      ],
+    },
+  },
+  {
+    area: 'UTIL',
+    tag: 'FV-4402',
+    service: 'Cooling water to condenser',
+    shows: 'Healthy: modified parabolic.',
+    valve: { kind: 'modified parabolic', parameter: null, ratedCoefficient: 100 },
+    line: { lossShare: 0.3 },
+    loop: { duty: { kind: 'diurnal', low: 25, high: 75 } },
+  },
+  {
+    area: 'UTIL',
+    tag: 'FV-4403',
+    service: 'Condensate spill-back',
+    shows: 'Uneven gain: a linear trim in a line that takes nearly all the drop.',
+    valve: { ...linear, ratedCoefficient: 63 },
+    line: { lossShare: 0.93 },
+    loop: { duty: { kind: 'steps', low: 12, high: 68 } },
+  },
+  {
+    area: 'UTIL',
+    tag: 'FV-4404',
+    service: 'Chilled water to spray dryer',
+    shows: 'Frozen signal: the flow transmitter stood still for thirty hours.',
+    loop: { frozen: [{ role: 'flow', from: 8 * day, to: 9.25 * day }] },
+  },
+  {
+    area: 'UTIL',
+    tag: 'FV-4405',
+    service: 'Soft water to tanks',
+    shows: 'No position is recorded: demand stands in for it.',
+    roles: ['demand', 'flow', 'setPoint', 'upstreamPressure', 'downstreamPressure'],
+  },
+  {
+    area: 'UTIL',
+    tag: 'FV-4406',
+    service: 'Quench water standby',
+    shows: 'Cannot be judged: stood at 40 % for the whole record.',
+    loop: { duty: { kind: 'constant demand', low: 40, high: 40 } },
+  },
+];
