@@ -25,6 +25,7 @@ export const routes: RouteObject[] = [
         ErrorBoundary: RouteFailed,
         children: [
           { index: true, lazy: () => import('./routes/ranking') },
+          { path: 'valves', lazy: () => import('./routes/valves') },
           { path: 'valves/:tag', lazy: () => import('./routes/valve') },
           { path: 'trends', lazy: () => import('./routes/trends') },
           { path: 'trends/new', lazy: () => import('./routes/new-trend') },
