@@ -105,7 +105,7 @@ export const valves: readonly DemoValve[] = [
     tag: 'FV-2203',
     service: 'Digester jacket hot water',
     roles: withoutSetPoint,
-    shows: 'Hunting: the loop is tuned too fast for it.',
+    shows: 'Hunting: swings every seven minutes, and the set point of its master swings with it.',
     loop: { duty: { kind: 'base load', low: 40, high: 60 }, swing: { period: 420, amplitude: 0.06 } },
   },
   {
@@ -232,7 +232,14 @@ export const valves: readonly DemoValve[] = [
     area: 'UTIL',
     tag: 'FV-4406',
     service: 'Quench water standby',
-    shows: 'Cannot be judged: stood at 40 % for the whole record.',
+    shows: 'Stood at 40 % for the whole record: its range can be told, its characteristic cannot.',
     loop: { duty: { kind: 'constant demand', low: 40, high: 40 } },
+  },
+  {
+    area: 'UTIL',
+    tag: 'FV-4407',
+    service: 'Tank farm vapour scrubber',
+    shows: 'Cannot be judged: newly registered, no trends yet.',
+    roles: [],
   },
 ];
