@@ -7,7 +7,7 @@ import {
   type Person,
   type PersonDraft,
 } from '@tailrace/shared/contracts/people';
-import { type Actor, type Role } from '@tailrace/shared/contracts/policy';
+import { type Actor, type Role, seesArea } from '@tailrace/shared/contracts/policy';
 import { randomUUID } from 'node:crypto';
 import { In, Repository } from 'typeorm';
 import { AuditService } from '../audit/audit.service.js';
@@ -60,11 +60,9 @@ export class PeopleService {
     };
   }
 
-  /** Adds an area to the site. Its code must be new. */
-  async addArea(
-    actor: { readonly id: string | null; readonly name: string },
-    draft: AreaDraft,
-  ): Promise<Area> {
+  /** Adds an area to the site. Its code must be new; only who sees all areas may, for it would be theirs too. */
+  async addArea(actor: Actor, draft: AreaDraft): Promise<Area> {
+    if (actor.areas !== null) throw new Problem('not-allowed');
     const { id: siteId } = await this.site();
     return this.transactions.run(async (manager) => {
       if (await manager.existsBy(AreaEntity, { siteId, code: draft.code }))
@@ -81,8 +79,12 @@ export class PeopleService {
     });
   }
 
-  /** Adds a person with the areas named; null: all of them. */
+  /** Adds a person with the areas named; null: all of them. Nobody gives more areas than they have. */
   async addPerson(actor: Actor, { areaIds, ...draft }: PersonDraft): Promise<Person> {
+    if (actor.areas !== null && (areaIds === null || !areaIds.every((id) => seesArea(actor, id))))
+      throw new Problem('invalid-input', 'area-not-yours', [
+        { pointer: '/areaIds', detail: 'Choose from your own areas.' },
+      ]);
     const areas = areaIds && (await this.areas.findBy({ id: In(areaIds) }));
     if (areas && areas.length < new Set(areaIds).size)
       throw new Problem('invalid-input', null, [

@@ -12,8 +12,10 @@ type ResponseSchema = Extract<Parameters<typeof ApiResponse>[0], { schema: unkno
  */
 export function Returns(schema: z.ZodType, status = 200): MethodDecorator & ClassDecorator {
   const described = z.toJSONSchema(schema, { io: 'output', unrepresentable: 'any', target: 'openapi-3.0' });
+  // Nest puts each element of a list through the schema, not the list as a whole.
+  const serialised = schema instanceof z.ZodArray ? (schema.element as z.ZodType) : schema;
   return applyDecorators(
-    SerializeOptions({ schema }),
+    SerializeOptions({ schema: serialised }),
     ApiResponse({ status, schema: described as ResponseSchema }),
   );
 }
