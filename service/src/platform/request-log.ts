@@ -1,7 +1,7 @@
 import { LoggerService } from '@nestjs/common';
 import { randomUUID } from 'node:crypto';
 import { type IncomingMessage, type ServerResponse } from 'node:http';
-import { pino, type Logger } from 'pino';
+import { pino, type Logger, type SerializedRequest, type SerializedResponse } from 'pino';
 import { pinoHttp } from 'pino-http';
 import { type Config } from './config.js';
 
@@ -9,16 +9,7 @@ import { type Config } from './config.js';
 export function makeLogger(config: Pick<Config, 'logLevel'>): Logger {
   return pino({
     level: config.logLevel,
-    serializers: {
-      req: (request: { id?: unknown; method?: string; url?: string; remoteAddress?: string }) => ({
-        id: request.id,
-        method: request.method,
-        url: request.url,
-        from: request.remoteAddress,
-      }),
-      res: (response: { statusCode?: number }) => ({ status: response.statusCode }),
-    },
-    redact: ['*.authorization', '*.cookie', '*.password', '*.accessToken'],
+    redact: ['req.headers', 'res.headers', '*.authorization', '*.cookie', '*.password', '*.accessToken'],
   });
 }
 
@@ -26,6 +17,16 @@ export function makeLogger(config: Pick<Config, 'logLevel'>): Logger {
 export function requestLog(logger: Logger) {
   return pinoHttp({
     logger,
+    // Of a request only what finds it again: its headers would open a session.
+    serializers: {
+      req: ({ id, method, url, remoteAddress }: SerializedRequest) => ({
+        id,
+        method,
+        url,
+        from: remoteAddress,
+      }),
+      res: ({ statusCode }: SerializedResponse) => ({ status: statusCode }),
+    },
     genReqId: (_request: IncomingMessage, response: ServerResponse) => {
       const id = randomUUID();
       response.setHeader('X-Request-Id', id);
