@@ -8,6 +8,7 @@ export const componentLook: ThemeOptions['components'] = {
     styleOverrides: {
       root: {
         minWidth: 0,
+        fontSize: '0.9375rem',
         '&.Mui-focusVisible': { outline: '2px solid var(--tr-water)', outlineOffset: 2 },
       },
       contained: { paddingInline: 14, paddingBlock: 5 },
@@ -70,9 +71,9 @@ export const componentLook: ThemeOptions['components'] = {
       root: {
         border: 0,
         fontSize: '0.9375rem',
-        '--DataGrid-t-color-border-base': 'var(--tr-line)',
-        '--DataGrid-t-header-background-base': 'var(--tr-paper)',
-        '--DataGrid-t-color-background-base': 'var(--tr-paper)',
+        '--DataGrid-rowBorderColor': 'var(--tr-line)',
+        '& .MuiDataGrid-cell, & .MuiDataGrid-columnHeader': { borderColor: 'var(--tr-line)' },
+        '& .MuiDataGrid-columnSeparator': { color: 'var(--tr-line)' },
       },
       columnHeaderTitle: { fontWeight: 500, fontSize: '0.8125rem', color: 'var(--tr-ink-2)' },
     },

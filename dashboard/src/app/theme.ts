@@ -45,6 +45,7 @@ function palette(scheme: SchemeName): PaletteOptions {
     background: { default: ink.paper, paper: ink.sheet },
     text: { primary: ink.ink, secondary: ink['ink-2'] },
     divider: ink.line,
+    DataGrid: { bg: ink.paper, headerBg: ink.paper, pinnedBg: ink.paper },
   };
 }
 

@@ -7,19 +7,22 @@ export function Facts({ facts }: { facts: readonly (readonly [name: string, fact
     ([, fact]) => fact !== null && fact !== undefined && fact !== false && fact !== '',
   );
   return (
-    <Box
-      component="dl"
-      sx={{ m: 0, display: 'grid', gridTemplateColumns: 'auto minmax(0, 1fr)', columnGap: 2 }}
-    >
+    <Box component="dl" sx={{ m: 0, alignSelf: 'start' }}>
       {known.map(([name, fact]) => (
         <Box
           key={name}
-          sx={{ display: 'contents', '& > *': { py: 0.375, borderBottom: '1px solid var(--tr-line)' } }}
+          sx={{
+            display: 'flex',
+            justifyContent: 'space-between',
+            columnGap: 2,
+            py: 0.375,
+            borderBottom: '1px solid var(--tr-line)',
+          }}
         >
-          <Box component="dt" sx={{ color: 'text.secondary' }}>
+          <Box component="dt" sx={{ color: 'text.secondary', flex: '0 1 auto' }}>
             {name}
           </Box>
-          <Box component="dd" sx={{ m: 0, textAlign: 'right' }}>
+          <Box component="dd" sx={{ m: 0, textAlign: 'right', flex: '0 1 auto' }}>
             {fact}
           </Box>
         </Box>

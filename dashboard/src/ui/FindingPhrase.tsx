@@ -30,11 +30,13 @@ export function FindingPhrase({ text, severity, explainedBy, number, state }: Fi
         </Box>
         {figure.length > 0 && `: ${figure.join(': ')}`}
         <Box component="span" sx={{ color: 'text.secondary', fontSize: '0.875em' }}>
-          {explainedBy ? ` · explained by ${explainedBy}` : ` · ${severityInWords(severity)}`}
+          {explainedBy ? ` · explained by ${explainedBy}` : ` · ${unbroken(severityInWords(severity))}`}
           {state && state !== 'new' ? ` · ${state}` : ''}
-          {number !== undefined ? ` · no. ${number}` : ''}
+          {number !== undefined ? ` · no.\u00a0${number}` : ''}
         </Box>
       </Box>
     </Box>
   );
 }
+
+const unbroken = (words: string) => words.replaceAll(' ', '\u00a0');

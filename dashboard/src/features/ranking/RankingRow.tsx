@@ -35,7 +35,12 @@ export function RankingRow({ row }: { row: Row }) {
       <Box
         component="td"
         role="cell"
-        sx={{ gridArea: 'rank', textAlign: 'right', fontSize: '1.125rem', fontWeight: 500 }}
+        sx={{
+          gridArea: 'rank',
+          textAlign: { xs: 'left', md: 'right' },
+          fontSize: '1.125rem',
+          fontWeight: 500,
+        }}
       >
         {row.rank ?? '–'}
       </Box>

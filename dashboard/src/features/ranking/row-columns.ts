@@ -7,11 +7,11 @@ export const rowColumns = {
   columnGap: 2,
   alignItems: 'start',
   gridTemplateColumns: {
-    xs: '2rem minmax(0, 1fr) auto',
+    xs: '40px minmax(0, 1fr) auto',
     md: `2.25rem minmax(9rem, 13rem) ${ridgeWidth}px 44px minmax(0, 1fr) 4.5rem`,
   },
   gridTemplateAreas: {
-    xs: '"rank valve attention" ". ridge ridge" ". glyph glyph" ". findings findings"',
+    xs: '"rank valve attention" "glyph ridge ridge" "findings findings findings"',
     md: '"rank valve ridge glyph findings attention"',
   },
   rowGap: { xs: 0.5, md: 0 },

@@ -82,7 +82,9 @@ export function AssessedSheet({ valve, assessment, living }: AssessedSheetProps)
         </Section>
       )}
       <TravelSection tag={tag} result={result} />
-      {movement && <MovementSection tag={tag} movement={movement} zone={zone} />}
+      {movement && (
+        <MovementSection tag={tag} movement={movement} pressureDrop={result.pressureDrop} zone={zone} />
+      )}
       {drift && (
         <Section title="Drift">
           <DriftChart tag={tag} drift={drift} zone={zone} />

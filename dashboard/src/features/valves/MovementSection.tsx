@@ -8,6 +8,7 @@ import { MovementFigures } from './MovementFigures';
 interface MovementSectionProps {
   tag: string;
   movement: NonNullable<PresentedAssessment['movement']>;
+  pressureDrop: PresentedAssessment['pressureDrop'];
   /** IANA zone of the site */
   zone: string;
 }
@@ -18,15 +19,16 @@ const splits = [
     of: 'positionToFlow',
     title: 'Position to flow',
     reference: 'Position, %',
-    response: 'Flow as travel, %',
+    response: null,
   },
-  { of: 'demandToFlow', title: 'Demand to flow', reference: 'Demand, %', response: 'Flow as travel, %' },
+  { of: 'demandToFlow', title: 'Demand to flow', reference: 'Demand, %', response: null },
 ] as const;
 
 /** How the valve moves: day by day, and what it loses where it turns round. */
-export function MovementSection({ tag, movement, zone }: MovementSectionProps) {
+export function MovementSection({ tag, movement, pressureDrop, zone }: MovementSectionProps) {
+  const flow = pressureDrop === 'measured' ? 'Flow coefficient, ln' : 'Flow, ln';
   return (
-    <Section title="Movement">
+    <Section title="How it has moved">
       <Box
         sx={{
           display: 'grid',
@@ -38,10 +40,10 @@ export function MovementSection({ tag, movement, zone }: MovementSectionProps) {
       >
         <MovementBars tag={tag} movement={movement} zone={zone} />
         <MovementFigures movement={movement} />
-        {splits.map(({ of, ...words }) => {
+        {splits.map(({ of, response, ...words }) => {
           const split = movement[of];
           return 'lines' in split && split.lines.length > 0 ? (
-            <SplitChart key={of} tag={tag} {...words} split={split} />
+            <SplitChart key={of} tag={tag} {...words} response={response ?? flow} split={split} />
           ) : null;
         })}
       </Box>

@@ -13,7 +13,7 @@ export function TravelSection({ tag, result }: { tag: string; result: PresentedA
   return (
     <>
       {range && (
-        <Section title="Travel">
+        <Section title="Where it has worked">
           <Box sx={{ ...twoColumns, gridTemplateColumns: { lg: 'minmax(0, 2.4fr) minmax(17rem, 1fr)' } }}>
             <TravelChart tag={tag} ridge={{ ...range, shares: range.ridge }} />
             <RangeFigures range={range} />

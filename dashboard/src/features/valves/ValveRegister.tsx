@@ -4,6 +4,7 @@ import { useQuery } from '@tanstack/react-query';
 import { type Area } from '@tailrace/shared/contracts/people';
 import { type ValveRow } from '@tailrace/shared/contracts/valves';
 import { roleWords, screenWords } from '@tailrace/shared/messages/screens';
+import { signalRoles } from '@tailrace/shared/core/series';
 import { Link as RouterLink } from 'react-router-dom';
 import { significant } from '../../lib/numbers';
 import { Choice } from '../../ui/Choice';
@@ -35,12 +36,12 @@ const columns: GridColDef<ValveRow>[] = [
       </Link>
     ),
   },
-  { field: 'service', headerName: 'Service', flex: 2, minWidth: 180, valueFormatter: written },
+  { field: 'service', headerName: 'Service', flex: 1.5, minWidth: 180, valueFormatter: written },
   { field: 'area', headerName: 'Area', flex: 1, minWidth: 120, valueGetter: (_, row) => row.area.name },
   {
     field: 'characteristic',
     headerName: 'Characteristic',
-    width: 150,
+    width: 140,
     sortable: false,
     valueFormatter: written,
   },
@@ -56,22 +57,27 @@ const columns: GridColDef<ValveRow>[] = [
         ? '–'
         : `${significant(row.ratedCoefficient)}\u00a0${row.coefficientUnit}`,
   },
-  { field: 'criticality', headerName: 'Criticality', width: 110 },
+  { field: 'criticality', headerName: 'Criticality', width: 100 },
   {
     field: 'trip',
     headerName: 'Duty',
-    width: 90,
+    width: 80,
     sortable: false,
     valueFormatter: (trip: boolean) => (trip ? 'trip' : 'control'),
   },
   {
     field: 'signalRoles',
     headerName: 'Signals bound',
-    flex: 2,
-    minWidth: 220,
+    flex: 2.5,
+    minWidth: 300,
     sortable: false,
     valueFormatter: (roles: ValveRow['signalRoles']) =>
-      roles.length > 0 ? roles.map((role) => roleWords[role]).join(', ') : 'none',
+      roles.length > 0
+        ? signalRoles
+            .filter((role) => roles.includes(role))
+            .map((role) => roleWords[role])
+            .join(', ')
+        : 'none',
   },
 ];
 

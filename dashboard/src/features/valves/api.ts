@@ -1,18 +1,10 @@
 import { keepPreviousData, queryOptions } from '@tanstack/react-query';
 import { type AssessmentPage, type StoredAssessment } from '@tailrace/shared/contracts/assessments';
 import { type FindingPage } from '@tailrace/shared/contracts/findings';
-import { type Area } from '@tailrace/shared/contracts/people';
 import { type Valve, type ValvePage, type ValveQuery } from '@tailrace/shared/contracts/valves';
 import { api } from '../../lib/api-client';
 
 const of = (tag: string) => `/valves/${encodeURIComponent(tag)}`;
-
-/** The areas of the person signed in. */
-export const areasQuery = queryOptions({
-  queryKey: ['areas'],
-  queryFn: ({ signal }) => api.get<Area[]>('/areas', { signal }),
-  staleTime: 300_000,
-});
 
 export const valvesQuery = (query: Partial<ValveQuery>) =>
   queryOptions({
