@@ -5,6 +5,7 @@ import { valve } from '@tailrace/shared/contracts/valves';
 import { type Test } from 'supertest';
 import { DataSource } from 'typeorm';
 import { AnalysisRunEntity } from '../src/runs/analysis-run.entity.js';
+import { RunQueue } from '../src/runs/run-queue.js';
 import { RunValveEntity } from '../src/runs/run-valve.entity.js';
 import { aService, type Client, type Service } from './a-service.js';
 import { aTrend } from './a-trend.js';
@@ -15,6 +16,11 @@ import { type Ground, type Knock, routeMatrix, type RouteRow } from './route-mat
 interface Layer {
   readonly route?: { readonly path: string; readonly methods: Record<string, boolean> };
 }
+
+const present = (value: Client | undefined): Client => {
+  if (!value) throw new Error('this person was not signed in');
+  return value;
+};
 
 /** Every route the running service really has, as `METHOD /path`; the API page's own files left aside. */
 function routesOf(service: Service): string[] {
@@ -67,13 +73,13 @@ describe('access', () => {
     });
 
     it.each(role.options)('for %s of the area', async (asker) => {
-      const answer = await send(row, await row.knock(ground), insiders.get(asker)!);
+      const answer = await send(row, await row.knock(ground), present(insiders.get(asker)));
       expect(answer.status).toBe(allowed(row, asker) ? row.granted : 403);
       if (row.hidden) expect(answer.text).toContain(row.hidden(ground));
     });
 
     it.each(role.options)('for %s of another area', async (asker) => {
-      const answer = await send(row, await row.knock(ground), strangers.get(asker)!);
+      const answer = await send(row, await row.knock(ground), present(strangers.get(asker)));
       expect(answer.status).toBe(allowed(row, asker) ? row.stranger : 403);
       if (row.hidden) expect(answer.text).not.toContain(row.hidden(ground));
     });
@@ -109,6 +115,7 @@ async function lay(service: Service, area: Area): Promise<Ground> {
     },
     /** Written straight into the database: one sent to the API would be worked off before it is stopped. */
     async freshRun() {
+      await service.app.get(RunQueue).work();
       runs += 1;
       const id = `00000000-0000-4000-8000-00000000${runs}`;
       await database.getRepository(AnalysisRunEntity).insert({

@@ -201,7 +201,10 @@ export const routeMatrix: readonly RouteRow[] = [
   {
     route: 'GET /api/trends',
     who: everyRole,
-    knock: async ({ freshFile }) => ({ path: `/api/trends?of=${await freshFile()}` }),
+    knock: async ({ freshFile }) => {
+      await freshFile();
+      return { path: '/api/trends' };
+    },
     granted: 200,
     stranger: 200,
     hidden: ({ area }) => area.id,
