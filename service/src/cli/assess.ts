@@ -31,9 +31,9 @@ async function assess(argv: readonly string[]): Promise<string> {
     );
   }
   const record = wholeRecord(signals);
-  const span = { from: given.from ?? record.from, to: given.to ?? record.to };
-  if (span.from >= span.to)
-    throw new UnusableInput('The window asked for lies outside the record, which leaves nothing to assess.');
+  // A window beside the record holds nothing, which the assessment says; it is no fault of the input.
+  const from = given.from ?? Math.min(record.from, (given.to ?? Infinity) - 1);
+  const span = { from, to: given.to ?? Math.max(record.to, from + 1) };
   const outcome = assessForm(form, signals, { span, ...(limits && { limits }) });
   if ('problems' in outcome)
     throw new UnusableInput(
