@@ -41,11 +41,14 @@ export const componentLook: ThemeOptions['components'] = {
       input: { paddingBlock: 7 },
     },
   },
+  MuiInputBase: {
+    styleOverrides: { input: { '&::placeholder': { color: 'var(--tr-ink-2)', opacity: 1 } } },
+  },
   MuiLink: { defaultProps: { underline: 'always' } },
   MuiTable: { defaultProps: { size: 'small' } },
   MuiTableCell: {
     styleOverrides: {
-      root: { borderColor: 'var(--tr-line)', padding: '5px 12px 5px 0', fontSize: '0.9375rem' },
+      root: { borderColor: 'var(--tr-line)', padding: '5px 20px 5px 0', fontSize: '0.9375rem' },
       head: {
         color: 'var(--tr-ink-2)',
         fontWeight: 500,

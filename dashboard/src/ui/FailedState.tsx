@@ -1,4 +1,5 @@
 import { Button } from '@mui/material';
+import { Link } from 'react-router-dom';
 import { ProblemError } from '../lib/problem-error';
 import { ForbiddenState } from './ForbiddenState';
 import { StateOfPage } from './StateOfPage';
@@ -12,6 +13,12 @@ interface FailedStateProps {
 export function FailedState({ error, onRetry }: FailedStateProps) {
   if (error instanceof ProblemError && error.kind === 'not-allowed') return <ForbiddenState />;
   const problem = error instanceof ProblemError ? error : null;
+  if (problem?.kind === 'not-found')
+    return (
+      <StateOfPage alert title={problem.title} actions={<Link to="/">To the ranking</Link>}>
+        {problem.detail}
+      </StateOfPage>
+    );
   return (
     <StateOfPage
       alert

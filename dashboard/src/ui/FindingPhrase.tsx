@@ -30,9 +30,11 @@ export function FindingPhrase({ text, severity, explainedBy, number, state }: Fi
         </Box>
         {figure.length > 0 && `: ${figure.join(': ')}`}
         <Box component="span" sx={{ color: 'text.secondary', fontSize: '0.875em' }}>
-          {explainedBy ? ` · explained by ${explainedBy}` : ` · ${unbroken(severityInWords(severity))}`}
-          {state && state !== 'new' ? ` · ${state}` : ''}
-          {number !== undefined ? ` · no.\u00a0${number}` : ''}
+          {explainedBy
+            ? ` ·\u00a0explained by ${explainedBy}`
+            : ` ·\u00a0${unbroken(severityInWords(severity))}`}
+          {state && state !== 'new' ? ` ·\u00a0${state}` : ''}
+          {number !== undefined ? ` ·\u00a0no.\u00a0${number}` : ''}
         </Box>
       </Box>
     </Box>

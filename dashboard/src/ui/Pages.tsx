@@ -20,7 +20,11 @@ export function Pages({ page, pageSize, total, what, onPage }: PagesProps) {
       aria-label={`Pages of ${what}`}
       sx={{ display: 'flex', gap: 1, alignItems: 'center', py: 1 }}
     >
-      <span>{from === 1 && to === total ? `${total} ${what}` : `${from} to ${to} of ${total} ${what}`}</span>
+      <span>
+        {from === 1 && to === total
+          ? `${total} ${total === 1 ? what.replace(/s$/, '') : what}`
+          : `${from} to ${to} of ${total} ${what}`}
+      </span>
       {total > pageSize && (
         <Box className="screen-only" sx={{ display: 'flex' }}>
           <Button disabled={page === 0} onClick={() => onPage(page - 1)}>

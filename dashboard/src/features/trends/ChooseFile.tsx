@@ -64,6 +64,7 @@ export function ChooseFile({ areas, onSent }: ChooseFileProps) {
       {areas.length > 1 && (
         <Choice
           label="Area whose valves it is about"
+          none="choose …"
           value={areaId}
           options={areas.map(({ id, name }) => ({ value: id, word: name }))}
           onChoose={setAreaId}

@@ -13,7 +13,7 @@ export function MovementFigures({ movement }: { movement: Movement }) {
     'reason' in split ? (
       <Reason>{split.reason}</Reason>
     ) : (
-      `${travel(split.deadBand, 2)} ± ${travel(1.96 * split.standardError, 2)}`
+      `${travel(split.deadBand, 2)}, standard error ${travel(split.standardError, 2)}`
     );
   return (
     <Facts
