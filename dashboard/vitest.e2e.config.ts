@@ -7,6 +7,7 @@ export default defineConfig({
   test: {
     environment: 'node',
     include: ['e2e/**/*.test.ts'],
+    globalSetup: ['e2e/global-setup.ts'],
     testTimeout: 120_000,
     hookTimeout: 240_000,
     fileParallelism: false,
