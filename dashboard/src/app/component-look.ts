@@ -49,6 +49,7 @@ export const componentLook: ThemeOptions['components'] = {
   MuiTableCell: {
     styleOverrides: {
       root: { borderColor: 'var(--tr-line)', padding: '5px 20px 5px 0', fontSize: '0.9375rem' },
+      alignRight: { paddingRight: 24, '&:last-child': { paddingRight: 0 } },
       head: {
         color: 'var(--tr-ink-2)',
         fontWeight: 500,

@@ -8,6 +8,18 @@ export function significant(value: number | null | undefined, digits = 3): strin
   return number(value, Math.min(decimals, 6));
 }
 
+/** A number as somebody entered it: neither rounded nor padded. */
+export function asEntered(value: number | null | undefined): string {
+  if (value === null || value === undefined || !Number.isFinite(value)) return '–';
+  const decimals = /\.(\d+)$/.exec(String(value))?.[1]?.length ?? 0;
+  return number(value, decimals);
+}
+
+/** A unit as the register holds it, its powers raised. */
+export function unitText(unit: string): string {
+  return unit.replace(/\bm\^?([23])(?!\d)/g, (_, power) => `m${power === '2' ? '²' : '³'}`);
+}
+
 /** A share 0 to 1 as a percentage's number: small ones keep a decimal. */
 export function percentage(share: number | null | undefined): string {
   if (share === null || share === undefined || !Number.isFinite(share)) return '–';

@@ -1,4 +1,4 @@
-import { Button } from '@mui/material';
+import { Box, Button } from '@mui/material';
 import { Link } from 'react-router-dom';
 import { ProblemError } from '../lib/problem-error';
 import { ForbiddenState } from './ForbiddenState';
@@ -35,6 +35,13 @@ export function FailedState({ error, onRetry }: FailedStateProps) {
       {problem && problem.status >= 500 && problem.instance
         ? ` Number in the log: ${problem.instance}.`
         : null}
+      {problem && problem.errors.length > 0 && (
+        <Box component="ul" sx={{ m: 0, pl: 2.5 }}>
+          {problem.errors.map(({ pointer, detail }) => (
+            <li key={`${pointer} ${detail}`}>{detail}</li>
+          ))}
+        </Box>
+      )}
     </StateOfPage>
   );
 }

@@ -4,7 +4,7 @@ interface PagesProps {
   page: number;
   pageSize: number;
   total: number;
-  /** what is counted: "valves" */
+  /** what is counted, as many: "valves" */
   what: string;
   onPage: (page: number) => void;
 }

@@ -88,7 +88,7 @@ export function RankingRow({ row }: { row: Row }) {
 function WithoutFinding({ row }: { row: Row }) {
   if (row.reason !== null)
     return (
-      <Box sx={{ color: 'text.secondary' }}>
+      <Box sx={{ color: 'text.secondary', pl: row.findings.length > 0 ? '52px' : 0 }}>
         <Box component="span" sx={{ fontWeight: 700, color: 'text.primary' }}>
           Cannot judge
         </Box>

@@ -2,7 +2,9 @@ import { Box, Checkbox, Table, TableBody, TableCell, TableHead, TableRow, TextFi
 import { type TrendLook } from '@tailrace/shared/contracts/trends';
 import { signalRoles, type SignalRole } from '@tailrace/shared/core/series';
 import { roleWords } from '@tailrace/shared/messages/screens';
+import { useState } from 'react';
 import { Choice } from '../../ui/Choice';
+import { Pages } from '../../ui/Pages';
 import { choiceFor, type SignalChoice, type SignalChoices } from './signal-choice';
 import { ValveChoice } from './ValveChoice';
 
@@ -12,10 +14,15 @@ interface SignalRowsProps {
   onChoose: (historianTag: string, choice: SignalChoice) => void;
 }
 
+/** A file may hold thousands of tags; each row has fields of its own. */
+const rowsOfPage = 60;
+
 const roles = signalRoles.map((role) => ({ value: role, word: roleWords[role] }));
 
 /** Every tag of the file: bound already, or to be bound now, or left in the file. */
 export function SignalRows({ tags, chosen, onChoose }: SignalRowsProps) {
+  const [page, setPage] = useState(0);
+  const shown = tags.slice(page * rowsOfPage, (page + 1) * rowsOfPage);
   return (
     <Box sx={{ overflowX: 'auto' }}>
       <Table aria-label="Tags of the file and their signals" sx={{ '& td': { verticalAlign: 'middle' } }}>
@@ -30,7 +37,7 @@ export function SignalRows({ tags, chosen, onChoose }: SignalRowsProps) {
           </TableRow>
         </TableHead>
         <TableBody>
-          {tags.map((tag) => {
+          {shown.map((tag) => {
             const choice = choiceFor(tag, chosen);
             const set = (part: Partial<SignalChoice>) => onChoose(tag.historianTag, { ...choice, ...part });
             const name = tag.historianTag;
@@ -92,6 +99,9 @@ export function SignalRows({ tags, chosen, onChoose }: SignalRowsProps) {
           })}
         </TableBody>
       </Table>
+      {tags.length > rowsOfPage && (
+        <Pages page={page} pageSize={rowsOfPage} total={tags.length} what="tags" onPage={setPage} />
+      )}
     </Box>
   );
 }

@@ -1,5 +1,6 @@
 import { Box, Table, TableBody, TableCell, TableHead, TableRow, Typography } from '@mui/material';
 import { type Valve } from '@tailrace/shared/contracts/valves';
+import { unitText } from '../../lib/numbers';
 import { Quantity } from '../../ui/Quantity';
 
 /** The design cases of a data sheet: flow and pressures the valve was sized for. */
@@ -9,7 +10,7 @@ export function DesignCases({ cases }: { cases: Valve['dataSheet']['designCases'
   const flowUnits = new Set(cases.map((one) => one.flowUnit));
   const pressureUnits = new Set(cases.map((one) => one.pressureUnit));
   const inHead = flowUnits.size === 1 && pressureUnits.size === 1;
-  const flowUnit = inHead ? `, ${first.flowUnit}` : '';
+  const flowUnit = inHead ? `, ${unitText(first.flowUnit)}` : '';
   const pressureUnit = inHead && first.pressureUnit ? `, ${first.pressureUnit}` : '';
   return (
     <Box sx={{ mt: 2, overflowX: 'auto' }}>
@@ -28,13 +29,18 @@ export function DesignCases({ cases }: { cases: Valve['dataSheet']['designCases'
             <TableRow key={one.name}>
               <TableCell>{one.name}</TableCell>
               <TableCell align="right">
-                <Quantity value={one.flow} unit={inHead ? undefined : one.flowUnit} />
+                <Quantity digits="as entered" value={one.flow} unit={inHead ? undefined : one.flowUnit} />
               </TableCell>
               <TableCell align="right">
-                <Quantity value={one.upstreamPressure} unit={inHead ? undefined : (one.pressureUnit ?? '')} />
+                <Quantity
+                  digits="as entered"
+                  value={one.upstreamPressure}
+                  unit={inHead ? undefined : (one.pressureUnit ?? '')}
+                />
               </TableCell>
               <TableCell align="right" sx={{ pr: '0 !important' }}>
                 <Quantity
+                  digits="as entered"
                   value={one.downstreamPressure}
                   unit={inHead ? undefined : (one.pressureUnit ?? '')}
                 />

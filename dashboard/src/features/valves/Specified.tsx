@@ -14,20 +14,20 @@ export function Specified({ valve }: { valve: Valve }) {
     ['Characteristic', sheet.characteristic],
     [
       'Rated coefficient',
-      sheet.ratedCoefficient && <Quantity value={sheet.ratedCoefficient} unit={sheet.coefficientUnit} />,
+      sheet.ratedCoefficient && <Entered value={sheet.ratedCoefficient} unit={sheet.coefficientUnit} />,
     ],
-    ['Rangeability', sheet.rangeability && <Quantity value={sheet.rangeability} unit="to 1" />],
+    ['Rangeability', sheet.rangeability && <Entered value={sheet.rangeability} unit="to 1" />],
     ['Working band', sheet.designBand && `${sheet.designBand.low} to ${sheet.designBand.high}\u00a0% travel`],
     ['Style', sheet.style],
-    ['Valve size', sheet.valveSize && <Quantity value={sheet.valveSize} unit="mm" />],
-    ['Pipe size', sheet.pipeSize && <Quantity value={sheet.pipeSize} unit="mm" />],
-    ['FL', sheet.FL && <Quantity value={sheet.FL} />],
-    ['xT', sheet.xT && <Quantity value={sheet.xT} />],
+    ['Valve size', sheet.valveSize && <Entered value={sheet.valveSize} unit="mm" />],
+    ['Pipe size', sheet.pipeSize && <Entered value={sheet.pipeSize} unit="mm" />],
+    ['FL', sheet.FL && <Entered value={sheet.FL} />],
+    ['xT', sheet.xT && <Entered value={sheet.xT} />],
     ['Fluid', fluid && (fluid.name ? `${fluid.name} (${fluid.phase})` : fluid.phase)],
-    ['Density', fluid?.density && <Quantity value={fluid.density} unit="kg/m³" />],
-    ['Vapour pressure', fluid?.vapourPressure && <Quantity value={fluid.vapourPressure} unit="kPa(a)" />],
-    ['Molar mass', fluid?.molarMass && <Quantity value={fluid.molarMass} unit="kg/kmol" />],
-    ['Flow span', sheet.flowSpan && <Quantity value={sheet.flowSpan} unit={sheet.flowSpanUnit ?? ''} />],
+    ['Density', fluid?.density && <Entered value={fluid.density} unit="kg/m³" />],
+    ['Vapour pressure', fluid?.vapourPressure && <Entered value={fluid.vapourPressure} unit="kPa(a)" />],
+    ['Molar mass', fluid?.molarMass && <Entered value={fluid.molarMass} unit="kg/kmol" />],
+    ['Flow span', sheet.flowSpan && <Entered value={sheet.flowSpan} unit={sheet.flowSpanUnit ?? ''} />],
     ['On failure', sheet.failAction && failWords[sheet.failAction]],
     ['Seat leakage class', sheet.leakageClass],
   ] as const;
@@ -46,4 +46,8 @@ export function Specified({ valve }: { valve: Valve }) {
       <DesignCases cases={sheet.designCases} />
     </>
   );
+}
+
+function Entered({ value, unit }: { value: number; unit?: string }) {
+  return <Quantity value={value} unit={unit} digits="as entered" />;
 }
