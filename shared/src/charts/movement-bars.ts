@@ -44,7 +44,7 @@ export function movementBars(days: readonly MovementDay[], size: Size, zone: str
     .sort((a, b) => a.day - b.day);
   const first = shown[0]?.day ?? NaN;
   const last = shown.at(-1)?.day ?? NaN;
-  const time = timeAxis(first, last + secondsOfDay, left, right, zone);
+  const time = timeAxis(first, last + secondsOfDay, left, right, zone, 'day');
 
   const panel = (top: number, valueOf: (day: MovementDay) => number): Panel => {
     const plot = { left, right, top, bottom: top + half };

@@ -15,17 +15,29 @@ export interface TimeAxis {
  * @param left px
  * @param right px
  * @param zone IANA zone of the words
+ * @param finest what a tick may name; where it is the day, each day is named once
  */
-export function timeAxis(from: number, to: number, left: number, right: number, zone: string): TimeAxis {
+export function timeAxis(
+  from: number,
+  to: number,
+  left: number,
+  right: number,
+  zone: string,
+  finest: 'hour' | 'day' = 'hour',
+): TimeAxis {
   const known = Number.isFinite(from) && Number.isFinite(to);
   const [start, end] = known ? [from, Math.max(to, from + 86_400)] : [0, 86_400];
   const scale = scaleUtc([start * 1000, end * 1000], [left, right]);
-  const words = dayWords(end - start, zone);
   const ticks = known ? scale.ticks(Math.max(2, Math.floor((right - left) / 90))) : [];
-  return {
-    scale,
-    ticks: ticks.map((date) => ({ at: scale(date), value: date.getTime() / 1000, text: words.format(date) })),
-  };
+  const [first, second] = ticks;
+  const withinDays = finest === 'hour' && first && second && second.getTime() - first.getTime() < 86_400_000;
+  const words = withinDays ? hourWords(zone) : dayWords(end - start, zone);
+  const named = ticks.map((date) => ({
+    at: scale(date),
+    value: date.getTime() / 1000,
+    text: words.format(date),
+  }));
+  return { scale, ticks: named.filter((tick, i) => tick.text !== named[i - 1]?.text) };
 }
 
 /** The day of an instant in words, for read-outs and tables. */
@@ -40,5 +52,17 @@ function dayWords(seconds: number, zone: string, full = false): Intl.DateTimeFor
     month: 'short',
     ...(long ? {} : { day: 'numeric' }),
     ...(long || full ? { year: 'numeric' } : {}),
+  });
+}
+
+/** Ticks closer than a day would all carry the same day. */
+function hourWords(zone: string): Intl.DateTimeFormat {
+  return new Intl.DateTimeFormat('en-GB', {
+    timeZone: zone,
+    month: 'short',
+    day: 'numeric',
+    hour: '2-digit',
+    minute: '2-digit',
+    hourCycle: 'h23',
   });
 }
