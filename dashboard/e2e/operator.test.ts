@@ -53,7 +53,7 @@ describe('an operator', () => {
     await page.getByText('FV-1101, demand').waitFor();
     await page.getByRole('button', { name: 'Go on to take in' }).click();
     await page.getByRole('button', { name: 'Take it in' }).click();
-    await page.getByText('taken with rejects').first().waitFor();
+    await page.getByText('1 reject is listed below').waitFor();
     const sheet = await page.locator('main').innerText();
     expect(sheet).toContain('time not understood');
     expect(sheet).toContain('202');
