@@ -4,6 +4,7 @@ import { number } from '@tailrace/shared/messages/figures';
 export function significant(value: number | null | undefined, digits = 3): string {
   if (value === null || value === undefined || !Number.isFinite(value)) return '–';
   if (value === 0) return '0';
+  if (Math.abs(value) < 1e-6) return 'under 0.000001';
   const decimals = Math.max(0, digits - 1 - Math.floor(Math.log10(Math.abs(value))));
   return number(value, Math.min(decimals, 6));
 }
@@ -17,7 +18,7 @@ export function asEntered(value: number | null | undefined): string {
 
 /** A unit as the register holds it, its powers raised. */
 export function unitText(unit: string): string {
-  return unit.replace(/\bm\^?([23])(?!\d)/g, (_, power) => `m${power === '2' ? '²' : '³'}`);
+  return unit.replace(/m\^?([23])(?!\d)/g, (_, power) => `m${power === '2' ? '²' : '³'}`);
 }
 
 /** A share 0 to 1 as a percentage's number: small ones keep a decimal. */
