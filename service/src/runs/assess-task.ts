@@ -1,13 +1,13 @@
 import { type PresentedAssessment } from '@tailrace/shared/contracts/assessments';
 import { type ValveForm } from '@tailrace/shared/contracts/valves';
-import { type Series, type SignalRole, type Span } from '@tailrace/shared/core/series';
+import { type AssessedSpan, type Series, type SignalRole } from '@tailrace/shared/core/series';
 import { type Site } from '@tailrace/shared/core/units/unit';
 
 /** One valve and its recorded signals; the columns are handed over, not copied. */
 export interface AssessTask {
   readonly form: ValveForm;
   readonly recorded: Partial<Record<SignalRole, Series>>;
-  readonly span: Span;
+  readonly span: AssessedSpan;
   readonly site: Site;
 }
 

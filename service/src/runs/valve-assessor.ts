@@ -40,12 +40,14 @@ export class ValveAssessor implements OnModuleDestroy {
   /** @param asked the window asked for; null: the default window of this valve */
   async assess(valve: ValveEntity, asked: Span | null): Promise<ValveOutcomeOf> {
     const site = await this.people.site();
-    const span = asked ?? (await this.defaultWindow(valve, site.zone));
-    if (!span) return { kind: 'no samples' };
+    const window = asked ?? (await this.defaultWindow(valve, site.zone));
+    if (!window) return { kind: 'no samples' };
+    const span = { ...window, since: Math.min(window.from, window.to - defaultLimits.drift.days * 86_400) };
     const recorded: Partial<Record<SignalRole, Series>> = {};
     const seen = new Map<string, Series>();
     for (const { role, historianTag } of valve.signals ?? []) {
-      const series = seen.get(historianTag) ?? (await this.samples.read(historianTag, span));
+      const series =
+        seen.get(historianTag) ?? (await this.samples.read(historianTag, { from: span.since, to: span.to }));
       // One tag may stand for two roles; columns are handed over, so the second needs its own.
       recorded[role] = seen.has(historianTag) ? copyOf(series) : series;
       seen.set(historianTag, series);

@@ -8,7 +8,7 @@ import {
 import { compareWithSheet } from './characteristic/compare-with-sheet.js';
 import { endReadings } from './characteristic/end-readings.js';
 import { type CharacteristicFit, fitCharacteristic } from './characteristic/fit-characteristic.js';
-import { type ValveRecord } from './data-sheet.js';
+import { type DataSheet, type ValveRecord } from './data-sheet.js';
 import { driftOf } from './drift/drift.js';
 import { passingOf } from './drift/passing.js';
 import { attentionOf } from './findings/attention.js';
@@ -23,7 +23,7 @@ import { type SteadyWindows, steadyWindows } from './preparation/steady-windows.
 import { installedGain } from './range/installed-gain.js';
 import { operatingRange } from './range/operating-range.js';
 import { cannotJudge, type CannotJudge } from './reasons.js';
-import { type History, type Span } from './series.js';
+import { type AssessedSpan, type History, type Span } from './series.js';
 import { seededRandom, seedFrom } from './statistics/seeded-random.js';
 import { serviceStress } from './stress/service-stress.js';
 import { unassessed } from './unassessed.js';
@@ -35,14 +35,14 @@ import { unassessed } from './unassessed.js';
  * the window and the method version, so the same data give the same bits.
  *
  * @param history recorded signals by role, units of methods.md §0
- * @param span window, s UTC, `to` excluded
+ * @param span window, s UTC, `to` excluded; drift is followed back to its `since`
  * @param limits thresholds of the handbook, or a site's own
  * @throws RangeError only where a series' columns differ in length
  */
 export function assess(
   valve: ValveRecord,
   history: History,
-  span: Span,
+  span: AssessedSpan,
   limits: Limits = defaultLimits,
 ): Assessment {
   const sheet = valve.dataSheet;
@@ -65,7 +65,7 @@ export function assess(
   const gain =
     characteristic === null ? null : installedGain(prepared, windows, range, characteristic, random, limits);
 
-  const drift = driftOf(windows, sheet, limits);
+  const drift = driftOf(windowsOfDrift(windows, { history, sheet, span }, limits), sheet, limits);
 
   const chapters: Chapters = {
     tag: valve.tag,
@@ -111,6 +111,17 @@ function reverseAction(
   if (demand !== null && position !== null && runsAgainst(demand, position))
     warnings.push({ code: 'demand-against-position', figures: {} });
   return warnings;
+}
+
+/** Steady windows of the longer record that drift is followed over; the window's own where no longer one is asked for. */
+function windowsOfDrift(
+  own: SteadyWindows,
+  { history, sheet, span }: { history: History; sheet: DataSheet; span: AssessedSpan },
+  limits: Limits,
+): SteadyWindows {
+  if (span.since === undefined || span.since >= span.from) return own;
+  const prepared = prepare(history, sheet, { from: span.since, to: span.to }, limits);
+  return 'judged' in prepared ? own : steadyWindows(prepared, sheet, limits);
 }
 
 function curveOf({ bins, logCurve }: CharacteristicFit) {

@@ -189,6 +189,8 @@ export const defaultLimits = {
     mismatchHigh: 98,
   },
   drift: {
+    /** how far back an analysis run follows drift, days: a year and a month, so that two like seasons meet */
+    days: 400,
     /** §7.1 */
     months: 8,
     weeks: 10,

@@ -36,3 +36,8 @@ export interface Span {
   readonly from: number;
   readonly to: number;
 }
+
+/** The window assessed. `since` says how far back its drift is followed: to the window's own start where absent. */
+export interface AssessedSpan extends Span {
+  readonly since?: number;
+}

@@ -2,7 +2,7 @@ import { type PresentedAssessment } from '../contracts/assessments.js';
 import { type ValveForm } from '../contracts/valves.js';
 import { assess } from '../core/assess.js';
 import { defaultLimits, type Limits } from '../core/limits.js';
-import { type Series, type SignalRole, type Span } from '../core/series.js';
+import { type AssessedSpan, type Series, type SignalRole, type Span } from '../core/series.js';
 import { type UnitRemark } from '../core/units/register-form.js';
 import { type Site, standardSite } from '../core/units/unit.js';
 import { valveRecord } from '../core/units/valve-record.js';
@@ -24,7 +24,7 @@ export interface FormAssessment {
 export function assessForm(
   form: ValveForm,
   recorded: Readonly<Partial<Record<SignalRole, Series>>>,
-  options: { readonly span?: Span | null; readonly limits?: Limits; readonly site?: Site } = {},
+  options: { readonly span?: AssessedSpan | null; readonly limits?: Limits; readonly site?: Site } = {},
 ): FormAssessment | { readonly problems: readonly UnitRemark[] } {
   const reading = valveRecord(form, options.site ?? standardSite);
   if ('problems' in reading) return reading;
