@@ -1,6 +1,11 @@
 import { useSearchParams } from 'react-router-dom';
 
 type State = Readonly<Record<string, string | undefined>>;
+type Change<N extends string> = (
+  change: Partial<Record<N, string | undefined>>,
+  /** whether the browser's way back leads to what was before; filters replace, steps do not */
+  way?: { replace: boolean },
+) => void;
 
 /**
  * View state that lives in the address: read it, and change part of it. Empty values leave the address; a change of
@@ -8,9 +13,7 @@ type State = Readonly<Record<string, string | undefined>>;
  *
  * @param names the parameters that belong to this view; others are left alone
  */
-export function useUrlState<N extends string>(
-  ...names: N[]
-): [Partial<Record<N, string>>, (change: Partial<Record<N, string | undefined>>) => void] {
+export function useUrlState<N extends string>(...names: N[]): [Partial<Record<N, string>>, Change<N>] {
   const [params, setParams] = useSearchParams();
   const state = Object.fromEntries(
     names.flatMap((name) => {
@@ -19,7 +22,7 @@ export function useUrlState<N extends string>(
     }),
   ) as Partial<Record<N, string>>;
 
-  const change = (wanted: State): void =>
+  const change = (wanted: State, { replace } = { replace: true }): void =>
     setParams(
       (before) => {
         const next = new URLSearchParams(before);
@@ -30,7 +33,7 @@ export function useUrlState<N extends string>(
         }
         return next;
       },
-      { replace: true, preventScrollReset: true },
+      { replace, preventScrollReset: replace },
     );
   return [state, change];
 }

@@ -30,7 +30,7 @@ export function Component() {
           key={file}
           id={file}
           step={step}
-          onStep={(next) => change({ step: next })}
+          onStep={(next) => change({ step: next }, { replace: false })}
           onTaken={() => void navigate(`/trends/${file}`)}
         />
       )}

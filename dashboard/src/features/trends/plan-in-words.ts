@@ -12,11 +12,13 @@ export const timeFormatWords = {
   'month first': 'month first: 11/30/2026 14:05',
 } as const;
 
+const delimiterMany = { ',': 'commas', ';': 'semicolons', '\t': 'tabs', '|': 'bars' } as const;
+
 /** How a file is read, in one sentence. */
 export function planInWords({ form, delimiter, decimalMark, time }: ColumnPlan): string {
   return (
-    `Read with ${formWords[form]}, columns parted by ${delimiterWords[delimiter]}, decimal ${decimalMark === '.' ? 'point' : 'comma'}; ` +
-    `time in “${time.column}”, ${timeFormatWords[time.format].split(':')[0]}, ` +
-    `stamps without an offset taken as ${time.zone}.`
+    `${form === 'wide' ? 'A column for each tag' : 'A row for each sample'}, parted by ${delimiterMany[delimiter]}, ` +
+    `decimal ${decimalMark === '.' ? 'point' : 'comma'}; time in the column “${time.column}”, ` +
+    `${timeFormatWords[time.format].split(':')[0]}; stamps without an offset are read as ${time.zone}.`
   );
 }
