@@ -68,13 +68,11 @@ describe('an operator', () => {
     await page.goto('/trends/new');
     await page.getByLabel('Area whose valves it is about').click();
     await page.getByRole('option', { name: 'Extraction' }).click();
-    await page
-      .getByLabel('Trend file')
-      .setInputFiles({
-        name: 'letter.csv',
-        mimeType: 'text/csv',
-        buffer: Buffer.from('Dear all,\nsee the attachment\n'),
-      });
+    await page.getByLabel('Trend file').setInputFiles({
+      name: 'letter.csv',
+      mimeType: 'text/csv',
+      buffer: Buffer.from('Dear all,\nsee the attachment\n'),
+    });
     await page.getByText('No column of times and values could be found').waitFor();
     await context.close();
   });
