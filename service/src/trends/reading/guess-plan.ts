@@ -148,6 +148,9 @@ function decimalMarkOf(
 
 const tagNames = /^(tag|tagname|tag name|point|point ?name|signal|name|item|variable)$/i;
 const valueNames = /^(value|val|reading|data)$/i;
+/** What historians write in place of a value: a column of nothing else is a dead signal, not a column of tags. */
+const noValue =
+  /^(\W*|[\W\d]*(bad|nan|null|none|n\/?a|no ?(data|good|value)|not connected|err(or)?|fail(ed|ure)?|invalid|i\/o timeout|time ?out|pt created|comm ?fail|shutdown|scan off|arc off-?line)\b.*)$/i;
 const qualityNames = /^(quality|status|q|confidence|opc ?quality)$/i;
 
 /** The columns of the long form: one of tag names, one of values, perhaps one of qualities. */
@@ -160,8 +163,10 @@ function longColumns(
   const named = (pattern: RegExp) => header.findIndex((name, i) => i !== time && pattern.test(name));
   const isText = (index: number) => rows.every((row) => cellValue(row[index] ?? '', mark).kind === 'bad');
   let tag = named(tagNames);
-  if (tag < 0 && header.length <= 5)
-    tag = header.findIndex((name, i) => i !== time && !qualityNames.test(name) && isText(i));
+  // Without a name that says so, one column of figures beside the names is what tells the long form.
+  const plain = header.flatMap((name, i) => (i === time || qualityNames.test(name) ? [] : [i]));
+  if (tag < 0 && header.length <= 5 && plain.filter((i) => !isText(i)).length === 1)
+    tag = plain.find((i) => isText(i) && !rows.every((row) => noValue.test(row[i] ?? ''))) ?? -1;
   if (tag < 0) return null;
   let value = named(valueNames);
   if (value < 0)
