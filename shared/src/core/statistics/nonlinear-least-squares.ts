@@ -103,7 +103,7 @@ function slopesOf(
     down[j] = p - spacing;
     const above = model(up);
     const below = model(down);
-    const width = (up[j]) - (down[j]);
+    const width = up[j] - down[j];
     return Float64Array.from({ length: n }, (_, i) => ((above[i] as number) - (below[i] as number)) / width);
   });
 }
