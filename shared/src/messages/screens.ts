@@ -183,6 +183,7 @@ function measureOf({ kind, rule }: Measured): (x: number) => string {
     case 'Off characteristic':
       return (x) => share(Math.exp(Math.abs(x)) - 1);
     case 'Lost capacity':
+      return (x) => capacityChange(-x);
     case 'Gained capacity':
       return capacityChange;
     case 'Travel offset':

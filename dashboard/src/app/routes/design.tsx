@@ -20,11 +20,13 @@ import { MovementBars } from '../../charts/MovementBars';
 import { SplitChart } from '../../charts/SplitChart';
 import { TravelChart } from '../../charts/TravelChart';
 import { TravelRidge, TravelRidgeAxis } from '../../charts/TravelRidge';
+import { PageTitle } from '../../ui/PageTitle';
 
 /** Every drawing of Tailrace with invented data, to look at while working on it. */
 export function Component() {
   return (
-    <Box sx={{ display: 'grid', gap: 4, maxWidth: 980, mx: 'auto', p: 2 }}>
+    <Box sx={{ display: 'grid', gap: 4, maxWidth: 980 }}>
+      <PageTitle>Drawings</PageTitle>
       <Box component="section">
         <Typography component="h2" variant="h6">
           Travel ridge

@@ -2,7 +2,7 @@ import { Box, Button, LinearProgress } from '@mui/material';
 import { useMutation } from '@tanstack/react-query';
 import { type Area } from '@tailrace/shared/contracts/people';
 import { type TrendFile } from '@tailrace/shared/contracts/trends';
-import { useRef, useState, type ChangeEvent, type DragEvent } from 'react';
+import { useRef, useState, type DragEvent } from 'react';
 import { fileSize, percentage } from '../../lib/numbers';
 import { Choice } from '../../ui/Choice';
 import { FailedState } from '../../ui/FailedState';
@@ -88,28 +88,21 @@ export function ChooseFile({ areas, onSent }: ChooseFileProps) {
           justifyItems: 'start',
         }}
       >
-        <Button
-          variant="contained"
-          component="label"
-          disabled={!area}
-          tabIndex={-1}
-          sx={{ '&:focus-within': { outline: '2px solid var(--tr-water)', outlineOffset: 2 } }}
-        >
+        <Button variant="contained" disabled={!area} onClick={() => input.current?.click()}>
           Choose a trend file
-          <Box
-            component="input"
-            type="file"
-            ref={input}
-            aria-label="Trend file"
-            disabled={!area}
-            accept=".csv,.txt,.tsv,.gz,text/csv,application/gzip"
-            onChange={(event: ChangeEvent<HTMLInputElement>) => {
-              const file = event.target.files?.[0];
-              if (file) sending.mutate(file);
-            }}
-            sx={{ position: 'absolute', opacity: 0, width: '1px', height: '1px' }}
-          />
         </Button>
+        <input
+          type="file"
+          ref={input}
+          hidden
+          aria-label="Trend file"
+          disabled={!area}
+          accept=".csv,.txt,.tsv,.gz,text/csv,application/gzip"
+          onChange={(event) => {
+            const file = event.target.files?.[0];
+            if (file) sending.mutate(file);
+          }}
+        />
         <Box sx={{ color: 'text.secondary' }}>
           {area
             ? 'or drop it here. CSV as the historian exports it, a column a tag or a row a sample; gzipped is fine.'

@@ -6,6 +6,7 @@ import { CharacteristicChart } from '../../charts/CharacteristicChart';
 import { DriftChart } from '../../charts/DriftChart';
 import { useMe } from '../../lib/session-query';
 import { Section } from '../../ui/Section';
+import { AttentionTerms } from './AttentionTerms';
 import { CannotJudge } from './CannotJudge';
 import { FindingEvidence } from './FindingEvidence';
 import { Found } from './Found';
@@ -79,6 +80,13 @@ export function AssessedSheet({ valve, assessment, living }: AssessedSheetProps)
               living={living.find(({ kind }) => kind === finding.kind)}
             />
           ))}
+          {result.attention !== null && (
+            <AttentionTerms
+              attention={result.attention}
+              terms={result.attentionTerms}
+              criticality={valve.dataSheet.criticality}
+            />
+          )}
         </Section>
       )}
       <TravelSection tag={tag} result={result} />
