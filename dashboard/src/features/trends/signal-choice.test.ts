@@ -1,49 +1,45 @@
 import { type TrendLook } from '@tailrace/shared/contracts/trends';
-import { describe, expect, it } from 'vitest';
-import { bindingsOf, countChoices, troubleWith } from './signal-choice';
+import { expect, test } from 'vitest';
+import { bindingsOf, choiceFor, countChoices, troubleWith } from './signal-choice';
 
-type SeenTag = TrendLook['tags'][number];
+type Tag = TrendLook['tags'][number];
+const valveId = '1c1f6c1e-2f0c-4d7e-9a55-0d6f3a1c1001';
+const aTag = (historianTag: string, of: Partial<Tag> = {}): Tag => ({
+  historianTag,
+  unit: null,
+  examples: [],
+  bound: [],
+  proposal: null,
+  ...of,
+});
+const proposed = aTag('FV-1.ZT', { unit: '%', proposal: { valveId, valveTag: 'FV-1', role: 'position' } });
 
-const valve = { valveId: '7a1f6c1e-2f0c-4d7e-9a55-0d6f3a1c0001', valveTag: 'FV-2101' };
+test('a proposal stands until a person chooses otherwise', () => {
+  expect(bindingsOf([proposed], {})).toEqual([
+    { historianTag: 'FV-1.ZT', valveId, role: 'position', unit: '%', reversed: false },
+  ]);
+  const left = { ...choiceFor(proposed, {}), valve: null };
+  expect(bindingsOf([proposed], { 'FV-1.ZT': left })).toEqual([]);
+});
 
-function aTag(historianTag: string, of: Partial<SeenTag> = {}): SeenTag {
-  return { historianTag, unit: null, examples: [], bound: [], proposal: null, ...of };
-}
-const proposed = aTag('FV-2101.OP', { unit: '%', proposal: { ...valve, role: 'demand' } });
-const boundBefore = aTag('FT-2101', { bound: [{ valveTag: 'FV-2101', role: 'flow', unit: 't/h' }] });
-const unknown = aTag('XX.9');
+test('a tag that is bound already is taken without being bound again', () => {
+  const bound = aTag('FT-1', { bound: [{ valveTag: 'FV-1', role: 'flow', unit: 'm3/h' }] });
+  expect(bindingsOf([bound], {})).toEqual([]);
+  expect(countChoices([bound, proposed, aTag('XX')], {})).toEqual({ bound: 1, newly: 1, left: 1 });
+});
 
-describe('signals of a trend file', () => {
-  it('binds what is proposed unless a person chooses otherwise', () => {
-    expect(bindingsOf([proposed, boundBefore, unknown], {})).toEqual([
-      { historianTag: 'FV-2101.OP', valveId: valve.valveId, role: 'demand', unit: '%', reversed: false },
-    ]);
-    const left = { valve: null, role: null, unit: '', reversed: false };
-    expect(bindingsOf([proposed], { 'FV-2101.OP': left })).toEqual([]);
-  });
+test('a valve without a signal is trouble, and names the tag', () => {
+  const half = { ...choiceFor(aTag('TT-5'), {}), valve: { id: valveId, tag: 'FV-1' } };
+  expect(troubleWith([aTag('TT-5')], { 'TT-5': half })).toContain('TT-5');
+});
 
-  it('counts a tag bound before as taken, and one without a valve as left in the file', () => {
-    expect(countChoices([proposed, boundBefore, unknown], {})).toEqual({ bound: 1, newly: 1, left: 1 });
-  });
+test('two tags for the same signal of one valve are trouble', () => {
+  const twin = aTag('FV-1.ZT2', { proposal: proposed.proposal });
+  expect(troubleWith([proposed], {})).toBeNull();
+  expect(troubleWith([proposed, twin], {})).toContain('FV-1.ZT2');
+});
 
-  it('sends an empty unit as none', () => {
-    const chosen = {
-      valve: { id: valve.valveId, tag: 'FV-2101' },
-      role: 'flow',
-      unit: ' ',
-      reversed: true,
-    } as const;
-    expect(bindingsOf([unknown], { 'XX.9': chosen })[0]).toMatchObject({ unit: null, reversed: true });
-  });
-
-  it('asks which signal it is when only the valve was chosen', () => {
-    const chosen = { valve: { id: valve.valveId, tag: 'FV-2101' }, role: null, unit: '', reversed: false };
-    expect(troubleWith([unknown], { 'XX.9': chosen })).toContain('XX.9');
-  });
-
-  it('will not bind two tags to one signal of one valve', () => {
-    const again = aTag('FV-2101.OP2', { proposal: { ...valve, role: 'demand' } });
-    expect(troubleWith([proposed, again], {})).toContain('FV-2101.OP2');
-    expect(troubleWith([proposed], {})).toBeNull();
-  });
+test('an empty unit is no unit', () => {
+  const choice = { ...choiceFor(proposed, {}), unit: '  ' };
+  expect(bindingsOf([proposed], { 'FV-1.ZT': choice })[0]?.unit).toBeNull();
 });
