@@ -121,6 +121,24 @@ describe('assess on the command line', () => {
     expect(travelSource).toBe('position');
   });
 
+  it('takes the unit of a column for a signal that names none', () => {
+    const rows = Array.from(
+      { length: 300 },
+      (_, i) => `${1_772_323_200 + 60 * i},${(i % 60) + 20},${i % 60}`,
+    );
+    const withUnits = (flow: string) =>
+      assessed(
+        [file('units.csv', [`time,V-2,${flow}`, ...rows].join('\n'))],
+        file('v2.json', {
+          tag: 'V-2',
+          dataSheet: {},
+          signals: { position: { tag: 'V-2', unit: '%' }, flow: { tag: 'F-2' } },
+        }),
+      ).warnings.filter((line) => line.includes('/signals/flow'));
+    expect(withUnits('F-2 [m3/h]')).toEqual([]);
+    expect(withUnits('F-2 (west)')).toHaveLength(1);
+  });
+
   it('judges by the limits given', () => {
     const valve = valveOf('XMV09', 'XMEAS19');
     const pinned = (...more: string[]) =>

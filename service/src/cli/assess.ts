@@ -18,7 +18,7 @@ async function assess(argv: readonly string[]): Promise<string> {
   const at = (path: string) => resolve(startedIn, path);
   const { form, plan } = await readValveFile(at(given.valve));
   const limits = given.limits === null ? null : await readLimitsFile(at(given.limits));
-  const { signals, remarks } = await recordedSignals(given.trends.map(at), form.signals, plan);
+  const { signals, bound, remarks } = await recordedSignals(given.trends.map(at), form.signals, plan);
   remarks.forEach(tell);
   if (!signals.position && !signals.demand) {
     const tags = [form.signals.position, form.signals.demand].flatMap((signal) =>
@@ -34,7 +34,7 @@ async function assess(argv: readonly string[]): Promise<string> {
   // A window beside the record holds nothing, which the assessment says; it is no fault of the input.
   const from = given.from ?? Math.min(record.from, (given.to ?? Infinity) - 1);
   const span = { from, to: given.to ?? Math.max(record.to, from + 1) };
-  const outcome = assessForm(form, signals, { span, ...(limits && { limits }) });
+  const outcome = assessForm({ ...form, signals: bound }, signals, { span, ...(limits && { limits }) });
   if ('problems' in outcome)
     throw new UnusableInput(
       `${given.valve} cannot be used:\n${outcome.problems.map((p) => `  ${unitRemarkSentence(p)}`).join('\n')}`,

@@ -1,9 +1,10 @@
-import { type TakeInReport } from '@tailrace/shared/contracts/trends';
-import { type Signals } from '@tailrace/shared/contracts/valves';
+import { type ColumnPlan, type TakeInReport } from '@tailrace/shared/contracts/trends';
+import { type Signal, type Signals } from '@tailrace/shared/contracts/valves';
 import { type Series, type SignalRole } from '@tailrace/shared/core/series';
+import { unitOf } from '@tailrace/shared/core/units/unit-of';
 import { stat } from 'node:fs/promises';
 import { columnHeader } from '../trends/reading/column-header.js';
-import { guessFile } from '../trends/reading/look.js';
+import { guessFile, lookAt } from '../trends/reading/look.js';
 import { readTrend } from '../trends/reading/read-trend.js';
 import { Refusal } from '../trends/reading/refusal.js';
 import { mergeSamples } from '../trends/store/merge-samples.js';
@@ -12,6 +13,8 @@ import { laidOver, type PartialPlan, wholePlan } from './valve-file.js';
 
 export interface Recorded {
   readonly signals: Partial<Record<SignalRole, Series>>;
+  /** the signals as bound; one without a unit takes the one its column names */
+  readonly bound: Signals;
   /** what a person should know of how the files were read */
   readonly remarks: readonly string[];
 }
@@ -28,11 +31,20 @@ export async function recordedSignals(
   plan: PartialPlan | null,
 ): Promise<Recorded> {
   const parts = new Map<string, Series[]>();
+  const units = new Map<string, string>();
   const remarks: string[] = [];
   for (const { tag } of Object.values(bound)) parts.set(columnHeader(tag).tag, []);
   for (const path of paths) {
     try {
-      const report = await readFileInto(parts, path, plan, remarks);
+      const whole = await planFor(path, plan, remarks);
+      const report = await readTrend({
+        path,
+        plan: whole,
+        wanted: (tag) => parts.has(tag),
+        onSamples: (tag, series) => void parts.get(tag)?.push(series),
+      });
+      for (const { historianTag, unit } of (await lookAt(path, whole)).tags)
+        if (unit !== null && unitOf(unit)) units.set(historianTag, unit);
       remarks.push(...rejectsOf(report).map((line) => `${path}: ${line}`));
     } catch (error) {
       if (error instanceof Refusal) throw new UnusableInput(`${path}: ${error.message}`);
@@ -40,35 +52,26 @@ export async function recordedSignals(
     }
   }
   const signals: Recorded['signals'] = {};
-  for (const [role, { tag }] of Object.entries(bound) as [SignalRole, { tag: string }][]) {
-    const series = joined(parts.get(columnHeader(tag).tag) ?? []);
+  const inUnits: Signals = {};
+  for (const [role, signal] of Object.entries(bound) as [SignalRole, Signal][]) {
+    const tag = columnHeader(signal.tag).tag;
+    const series = joined(parts.get(tag) ?? []);
     if (series) signals[role] = series;
-    else remarks.push(`The tag “${tag}” (${role}) is in none of the files.`);
+    else remarks.push(`The tag “${signal.tag}” (${role}) is in none of the files.`);
+    inUnits[role] = { ...signal, unit: signal.unit ?? units.get(tag) ?? null };
   }
-  return { signals, remarks };
+  return { signals, bound: inUnits, remarks };
 }
 
-async function readFileInto(
-  parts: ReadonlyMap<string, Series[]>,
-  path: string,
-  given: PartialPlan | null,
-  remarks: string[],
-): Promise<TakeInReport> {
+async function planFor(path: string, given: PartialPlan | null, remarks: string[]): Promise<ColumnPlan> {
   const found = await stat(path).catch((error: Error) => error);
   if (found instanceof Error) throw new UnusableInput(`${path} cannot be read: ${found.message}.`);
   if (!found.isFile()) throw new UnusableInput(`${path} is not a file.`);
-  let plan = given && wholePlan(given);
-  if (!plan) {
-    const guess = await guessFile(path, given?.time?.zone ?? 'UTC');
-    plan = given ? laidOver(guess.plan, given, path) : guess.plan;
-    remarks.push(...guess.doubts.map((doubt) => `${path}: ${doubt}`));
-  }
-  return readTrend({
-    path,
-    plan,
-    wanted: (tag) => parts.has(tag),
-    onSamples: (tag, series) => void parts.get(tag)?.push(series),
-  });
+  const whole = given && wholePlan(given);
+  if (whole) return whole;
+  const { plan, doubts } = await guessFile(path, given?.time?.zone ?? 'UTC');
+  remarks.push(...doubts.map((doubt) => `${path}: ${doubt}`));
+  return given ? laidOver(plan, given, path) : plan;
 }
 
 /** Ascending records as one; where two hold a time, the later record's sample stands. */
