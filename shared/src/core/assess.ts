@@ -89,7 +89,7 @@ export function assess(
     warnings: [...prepared.warnings, ...reverseAction(prepared, fit)],
   };
   const found = find(chapters, sheet, limits);
-  const refusal = principalRefusal(prepared, fit, range);
+  const refusal = principalRefusal(prepared, windows, fit, range);
   return {
     ...chapters,
     judged: characteristic !== null || range?.judged === true || found.findings.length > 0,
@@ -135,6 +135,7 @@ const stoodStill = 1;
 /** What principally cannot be judged: the characteristic, for the reason that comes first on the way to it. */
 function principalRefusal(
   prepared: Prepared,
+  windows: SteadyWindows,
   fit: CharacteristicFit,
   range: OperatingRange | null,
 ): CannotJudge | null {
@@ -146,6 +147,8 @@ function principalRefusal(
     const refused = prepared.warnings.find((w) => w.code === 'flow-quality');
     return refused ? cannotJudge('signal-quality', refused.figures) : cannotJudge('no-flow');
   }
+  const choked = windows.choked.reduce((count, one) => count + one, 0);
+  if (choked > windows.count / 2) return cannotJudge('choked-throughout', { share: choked / windows.count });
   return fit.refusal;
 }
 

@@ -62,7 +62,7 @@ export function runInWords(run: {
 
 /** The nightly schedule. */
 export function scheduleInWords(at: string, zone: string, next: string | null): string {
-  return `Every night at ${at} (${zone}) all valves are assessed again${next ? `; next on ${next}` : ''}.`;
+  return `Every night at ${at} (${zone}) every valve with new samples is assessed again${next ? `; next on ${next}` : ''}.`;
 }
 
 /** What was taken in from a trend file, and what was not. */
