@@ -61,7 +61,7 @@ export function Outcomes({ outcomes, view, onChange }: OutcomesProps) {
                 <TableCell>Outcome</TableCell>
                 <TableCell align="right">Findings</TableCell>
                 <TableCell align="right">Computing</TableCell>
-                <TableCell sx={{ width: '60%' }}>Reason</TableCell>
+                <TableCell sx={{ width: '60%', minWidth: '18rem' }}>Reason</TableCell>
               </TableRow>
             </TableHead>
             <TableBody>

@@ -25,7 +25,10 @@ export function FileState({ file }: { file: Pick<TrendFile, 'state' | 'progress'
       ) : null}
       {state}
       {rejected > 0 && (
-        <Box component="span" sx={{ color: 'text.secondary' }}>{` · ${number(rejected)} rejects`}</Box>
+        <Box
+          component="span"
+          sx={{ color: 'text.secondary' }}
+        >{` ·\u00a0${number(rejected)}\u00a0${rejected === 1 ? 'reject' : 'rejects'}`}</Box>
       )}
     </Box>
   );

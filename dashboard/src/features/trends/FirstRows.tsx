@@ -13,9 +13,9 @@ export function FirstRows({ look, rows = 8 }: { look: TrendLook; rows?: number }
       <Table aria-label="First rows as they are understood">
         <TableHead>
           <TableRow>
-            <TableCell sx={{ minWidth: '11rem' }}>{`Understood as, site time`}</TableCell>
+            <TableCell sx={{ minWidth: '11rem' }}>Understood as, site time</TableCell>
             {header.slice(0, columnsShown).map((name, i) => (
-              <TableCell key={i} sx={{ overflowWrap: 'anywhere' }}>
+              <TableCell key={i} sx={{ whiteSpace: 'nowrap' }}>
                 {name}
                 {name === plan.time.column && ' (time)'}
               </TableCell>

@@ -43,7 +43,9 @@ export function SignalRows({ tags, chosen, onChoose }: SignalRowsProps) {
             const name = tag.historianTag;
             return (
               <TableRow key={name}>
-                <TableCell sx={{ fontWeight: 500, overflowWrap: 'anywhere' }}>{name}</TableCell>
+                <TableCell sx={{ fontWeight: 500, overflowWrap: 'anywhere', minWidth: '8rem' }}>
+                  {name}
+                </TableCell>
                 <TableCell sx={{ color: 'text.secondary' }}>{tag.examples.slice(0, 3).join('; ')}</TableCell>
                 {tag.bound.length > 0 ? (
                   <TableCell colSpan={4}>
