@@ -3,6 +3,17 @@ import { analysisRun, runDetail, type RunDetail, stoppable } from '@tailrace/sha
 import { type TakeInDraft, trendFile, type TrendFile, trendLook } from '@tailrace/shared/contracts/trends';
 import { type Client } from './a-service.js';
 
+/** Asks until the answer is there; gives up after half a minute, so that a fault fails its test and no other. */
+async function until<T>(ask: () => Promise<T | null>): Promise<T> {
+  const giveUp = Date.now() + 30_000;
+  while (Date.now() < giveUp) {
+    const answer = await ask();
+    if (answer !== null) return answer;
+    await moment();
+  }
+  throw new Error('nothing changed within half a minute');
+}
+
 const moment = () => new Promise((resolve) => setTimeout(resolve, 25));
 
 export async function send(client: Client, area: Area, bytes: string | Buffer): Promise<TrendFile> {
@@ -15,11 +26,10 @@ export async function send(client: Client, area: Area, bytes: string | Buffer): 
 
 /** The file once it is no longer being read. */
 export async function settled(client: Client, id: string): Promise<TrendFile> {
-  for (;;) {
+  return until(async () => {
     const file = trendFile.parse((await client.get(`/api/trends/${id}`).expect(200)).body);
-    if (file.state !== 'reading') return file;
-    await moment();
-  }
+    return file.state === 'reading' ? null : file;
+  });
 }
 
 /** Sends a trend file, takes the guessed plan for right, and waits until it has been read. */
@@ -40,9 +50,8 @@ export async function takeIn(
 export async function assess(client: Client, tags?: string[]): Promise<RunDetail> {
   const started = await client.post('/api/runs', { tags }).expect(202);
   const { id } = analysisRun.parse(started.body);
-  for (;;) {
+  return until(async () => {
     const run = runDetail.parse((await client.get(`/api/runs/${id}`).expect(200)).body);
-    if (!stoppable.includes(run.state)) return run;
-    await moment();
-  }
+    return stoppable.includes(run.state) ? null : run;
+  });
 }

@@ -23,6 +23,8 @@ export async function receiveUpload<T>(
   const fields = new Map<string, string>();
   let name = '';
   let receiving: Promise<T> | null = null;
+  let refuse: (reason: unknown) => void = () => undefined;
+  const refused = new Promise<never>((_, reject) => (refuse = reject));
   form.on('field', (field, value) => fields.set(field, value));
   form.on('file', (field, bytes, { filename }) => {
     if (receiving || field !== 'file') {
@@ -32,7 +34,7 @@ export async function receiveUpload<T>(
     // A part may come without a file name; the types do not say so.
     name = filename ?? '';
     receiving = receive(bytes);
-    receiving.catch(() => bytes.resume());
+    receiving.catch(refuse);
   });
   const cut = new Promise<never>((_, reject) => {
     const broken = () => {
@@ -49,8 +51,12 @@ export async function receiveUpload<T>(
   });
   request.pipe(form);
   try {
-    await Promise.race([parsed, cut]);
+    await Promise.race([parsed, cut, refused]);
   } catch (error) {
+    // What still comes is let go: a client that is cut while it sends would not hear why.
+    request.unpipe(form);
+    request.resume();
+    form.destroy();
     await settled(receiving);
     throw error instanceof Problem ? error : new Problem('upload-cut', null, [], { cause: error });
   }
