@@ -1,9 +1,12 @@
 import '@testing-library/jest-dom/vitest';
-import { cleanup } from '@testing-library/react';
+import { cleanup, configure } from '@testing-library/react';
 import { afterAll, afterEach, beforeAll } from 'vitest';
 import { endSession } from './lib/session';
 import { queryClient } from './lib/query-client';
 import { plantServer } from './test-plant';
+
+// generous, so that a busy machine does not fail a test that only waits
+configure({ asyncUtilTimeout: 6_000 });
 
 beforeAll(() => plantServer.listen({ onUnhandledRequest: 'error' }));
 afterEach(() => {

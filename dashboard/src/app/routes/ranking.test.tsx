@@ -4,6 +4,7 @@ import { http, HttpResponse } from 'msw';
 import { expect, test } from 'vitest';
 import { openAt } from '../../test-app';
 import { aProblem, aRankingPage, aRankingRow, plantServer, steam } from '../../test-plant';
+import { aValve, withValve } from '../../test-valve';
 
 /** A ranking that remembers what it was asked. */
 function rankingOf(...rows: ReturnType<typeof aRankingRow>[]) {
@@ -67,8 +68,7 @@ test('the next page is asked of the service', async () => {
 
 test('j and k move from row to row, and Enter opens the valve', async () => {
   rankingOf(aRankingRow(), aRankingRow({ tag: 'FV-2102', rank: 2 }));
-  plantServer.use(http.get('/api/valves/:tag', () => aProblem('not-found', 'It is not there.')));
-  plantServer.use(http.get('/api/valves/:tag/assessments', () => HttpResponse.json({ rows: [], total: 0 })));
+  withValve(aValve(), []);
   const { user, where } = openAt('/');
   await screen.findByRole('link', { name: 'FV-2101' });
   await user.keyboard('jj');
