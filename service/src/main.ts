@@ -20,9 +20,15 @@ async function start(): Promise<void> {
   }
 }
 
+/** What stopped the start, in words where somebody can mend it. */
+function whyNot(error: unknown): string {
+  if (error instanceof ConfigError) return error.message;
+  const { code, port, stack } = error as NodeJS.ErrnoException & { port?: number };
+  if (code === 'EADDRINUSE') return `Tailrace cannot start; port ${port} is in use. Set PORT to another one.`;
+  return stack ?? String(error);
+}
+
 start().catch((error: unknown) => {
-  process.stderr.write(
-    `${error instanceof ConfigError ? error.message : String((error as Error).stack ?? error)}\n`,
-  );
-  process.exitCode = 1;
+  process.stderr.write(`${whyNot(error)}\n`);
+  process.exit(1);
 });
