@@ -27,7 +27,7 @@ async function assess(argv: readonly string[]): Promise<string> {
     throw new UnusableInput(
       tags.length === 0
         ? 'The valve has neither a position nor a demand signal; give the tag of one.'
-        : `No travel can be read: ${tags.map((tag) => `“${tag}”`).join(' and ')} is in none of the files.`,
+        : `No travel can be read: ${tags.map((tag) => `“${tag}”`).join(' and ')} is in none of the files, or has no sample there.`,
     );
   }
   const record = wholeRecord(signals);

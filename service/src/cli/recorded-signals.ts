@@ -57,7 +57,7 @@ export async function recordedSignals(
     const tag = columnHeader(signal.tag).tag;
     const series = joined(parts.get(tag) ?? []);
     if (series) signals[role] = series;
-    else remarks.push(`The tag “${signal.tag}” (${role}) is in none of the files.`);
+    else remarks.push(`The tag “${signal.tag}” (${role}) is in none of the files, or has no sample there.`);
     inUnits[role] = { ...signal, unit: signal.unit ?? units.get(tag) ?? null };
   }
   return { signals, bound: inUnits, remarks };
