@@ -9,6 +9,9 @@ import { serveDashboard } from './platform/dashboard.js';
 import { makeLogger, NestLog, requestLog } from './platform/request-log.js';
 import { securityHeaders } from './platform/security-headers.js';
 
+/** ms: Node's own five minutes would cut a large trend file on a slow line */
+const longestRequest = 4 * 3_600_000;
+
 /** The whole service, ready to listen: what main, the tests and the seed start from. */
 export async function createApp(config: Config): Promise<NestExpressApplication> {
   const logger = makeLogger(config);
@@ -18,6 +21,7 @@ export async function createApp(config: Config): Promise<NestExpressApplication>
   });
   app.set('trust proxy', config.trustProxy);
   app.disable('x-powered-by');
+  app.getHttpServer().requestTimeout = longestRequest;
   app.use(requestLog(logger));
   app.use(securityHeaders(config));
   app.use(compression());

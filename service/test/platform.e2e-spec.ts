@@ -42,6 +42,12 @@ describe('the service', () => {
     await get('/api/health').expect(200);
   });
 
+  it('gives a large file on a slow line hours, but a request that never gets to its body a minute', () => {
+    const { requestTimeout, headersTimeout } = service.app.getHttpServer();
+    expect(requestTimeout).toBeGreaterThan(3_600_000);
+    expect(headersTimeout).toBeLessThanOrEqual(60_000);
+  });
+
   it('opens a deep link of the dashboard with a page no cache keeps', async () => {
     const page = await get('/valves/FV-101?window=30d').expect(200);
     expect(page.type).toBe('text/html');
