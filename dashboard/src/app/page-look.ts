@@ -18,7 +18,16 @@ export const pageLook = {
   'a:not([class])': { color: 'var(--tr-water)', textUnderlineOffset: '0.15em' },
   '@media print': {
     '@page': { margin: '12mm' },
-    ':root, [data-scheme="dark"]': { ...properties('light'), '--tr-paper': '#FFFFFF', colorScheme: 'light' },
+    // the library's own properties too, said stronger than it does: a dark page would else print in pale grey
+    ':root:root': {
+      ...properties('light'),
+      '--tr-paper': '#FFFFFF',
+      '--mui-palette-text-primary': inksOf.light.ink,
+      '--mui-palette-text-secondary': inksOf.light['ink-2'],
+      '--mui-palette-primary-main': inksOf.light.water,
+      '--mui-palette-background-default': '#FFFFFF',
+      colorScheme: 'light',
+    },
     body: { fontSize: '10pt', overflowY: 'visible' },
     '.screen-only': { display: 'none !important' },
   },

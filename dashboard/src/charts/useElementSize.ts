@@ -1,5 +1,8 @@
 import { useCallback, useState, type RefCallback } from 'react';
 
+/** px: below this a drawing has no room between its axes; while a page is laid out it may pass through */
+const narrowest = 160;
+
 /**
  * The width an element has on the page, followed as it changes.
  *
@@ -12,7 +15,7 @@ export function useElementSize<E extends Element>(unmeasured: number): [RefCallb
     if (!element || typeof ResizeObserver === 'undefined') return;
     const observer = new ResizeObserver(([entry]) => {
       const measured = Math.round(entry?.contentRect.width ?? 0);
-      if (measured > 0) setWidth(measured);
+      if (measured > 0) setWidth(Math.max(measured, narrowest));
     });
     observer.observe(element);
     return () => observer.disconnect();

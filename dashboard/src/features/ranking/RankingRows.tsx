@@ -22,7 +22,7 @@ const headLook = {
   pt: 0.5,
   pb: 0.25,
   '& th': { p: 0, fontWeight: 500, textAlign: 'left' },
-  '@media print': { display: 'grid' },
+  '@media print': { ...rowColumns['@media print'], display: 'grid' },
 } as const;
 
 /**
