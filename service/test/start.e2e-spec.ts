@@ -21,6 +21,16 @@ function start(env: Record<string, string>): { child: ChildProcess; said: () => 
 const ended = (child: ChildProcess) =>
   new Promise<number | null>((resolve) => child.once('close', (code) => resolve(code)));
 
+/** Where it says it is, once it does; what it said where it ends before that. */
+async function address(child: ChildProcess, said: () => string): Promise<string> {
+  for (;;) {
+    const [url] = /http:\/\/localhost:\d+/.exec(said()) ?? [];
+    if (url) return url;
+    if (child.exitCode !== null) throw new Error(said());
+    await new Promise((resolve) => setTimeout(resolve, 50));
+  }
+}
+
 describe('a start of the service', () => {
   let folder: string;
   beforeEach(() => {
@@ -45,9 +55,7 @@ describe('a start of the service', () => {
       ADMIN_PASSWORD: 'long enough',
     });
     const closed = ended(child);
-    while (!said().includes('http://localhost:') && child.exitCode === null)
-      await new Promise((resolve) => setTimeout(resolve, 50));
-    const [url] = /http:\/\/localhost:\d+/.exec(said()) ?? [said()];
+    const url = await address(child, said);
     expect(said()).toContain('first@plant.example can sign in');
     expect((await fetch(`${url}/api/health`)).status).toBe(200);
     child.kill('SIGTERM');
@@ -55,5 +63,33 @@ describe('a start of the service', () => {
     // SQLite removes its log when the last connection closes cleanly.
     expect(existsSync(join(folder, 'tailrace.db'))).toBe(true);
     expect(existsSync(join(folder, 'tailrace.db-wal'))).toBe(false);
+  });
+
+  it('logs each request with its id, and nothing that opens a session', async () => {
+    const account = { email: 'first@plant.example', password: 'long enough' };
+    const { child, said } = start({
+      DATA_DIR: folder,
+      LOG_LEVEL: 'trace',
+      ADMIN_EMAIL: account.email,
+      ADMIN_PASSWORD: account.password,
+    });
+    const closed = ended(child);
+    const url = await address(child, said);
+    const json = { 'Content-Type': 'application/json' };
+    const opened = await fetch(`${url}/api/session`, {
+      method: 'POST',
+      headers: json,
+      body: JSON.stringify(account),
+    });
+    const { accessToken } = (await opened.json()) as { accessToken: string };
+    const cookie = opened.headers.get('set-cookie')?.split(';')[0] ?? '';
+    const headers = { Authorization: `Bearer ${accessToken}` };
+    const asked = await fetch(`${url}/api/me`, { headers });
+    await fetch(`${url}/api/session/refresh`, { method: 'POST', headers: { Cookie: cookie } });
+    child.kill('SIGTERM');
+    await closed;
+    expect(said()).toContain(asked.headers.get('x-request-id'));
+    for (const secret of [account.password, accessToken, cookie.split('=')[1]])
+      expect(said()).not.toContain(secret);
   });
 });
