@@ -3,6 +3,7 @@ import { Navigate, useNavigate, useSearchParams } from 'react-router-dom';
 import { useQuery } from '@tanstack/react-query';
 import { SignInForm } from '../../features/people/SignInForm';
 import { meQuery } from '../../lib/session-query';
+import { WaterLine } from '../layout/WaterLine';
 import { Wordmark } from '../layout/Wordmark';
 import { addressAfterSignIn } from '../require-me';
 
@@ -15,6 +16,7 @@ export function Component() {
   return (
     <Box component="main" sx={{ px: { xs: 2, sm: 6 }, pt: { xs: 4, sm: '16vh' }, maxWidth: 720 }}>
       <title>Sign in · Tailrace</title>
+      <WaterLine />
       <Wordmark />
       <Typography variant="h1" sx={{ mt: 4, mb: 0.5 }}>
         Sign in
