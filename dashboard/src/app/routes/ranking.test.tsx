@@ -1,5 +1,5 @@
 import { screen, waitFor, within } from '@testing-library/react';
-import { shortCaution } from '@tailrace/shared/messages/cautions';
+import { shortCaution, tripCaution } from '@tailrace/shared/messages/cautions';
 import { http, HttpResponse } from 'msw';
 import { expect, test } from 'vitest';
 import { openAt } from '../../test-app';
@@ -139,4 +139,10 @@ test('a role that may not read the ranking is told so, without a button that wou
   openAt('/');
   expect(await screen.findByRole('alert')).toHaveTextContent('Your role does not allow this');
   expect(screen.queryByRole('button', { name: 'Try again' })).not.toBeInTheDocument();
+});
+
+test('the list of trip valves carries their own caution', async () => {
+  rankingOf(aRankingRow({ trip: true, attention: null, rank: null }));
+  openAt('/?list=trip');
+  expect(await screen.findByRole('note')).toHaveTextContent(tripCaution);
 });

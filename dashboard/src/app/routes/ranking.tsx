@@ -20,7 +20,7 @@ export function Component() {
     <>
       <PageTitle>Ranking</PageTitle>
       <RankingPage view={view} areas={areas} onChange={change} />
-      <SafetyCaution />
+      <SafetyCaution trip={view.list === 'trip'} />
     </>
   );
 }
