@@ -13,7 +13,7 @@ describe('a value cell', () => {
     expect(cellValue(text, mark)).toEqual({ kind: 'number', value });
   });
 
-  it.each(['Bad', 'No Data', 'I/O Timeout', '#N/A', 'NaN', '[-11059] No Good Data'])(
+  it.each(['Bad', 'No Data', 'I/O Timeout', '#N/A', 'NaN', '[-11059] No Good Data', 'LO', 'HI'])(
     '%s is a bad sample, never a zero',
     (text) => {
       expect(cellValue(text, '.').kind).toBe('bad');

@@ -14,10 +14,13 @@ const notANumber: CellValue = { kind: 'not a number' };
 const pointNumber = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/;
 const commaNumber = /^[+-]?(?:\d+,?\d*|,\d+)(?:[eE][+-]?\d+)?$/;
 
-/** Words controllers and historians write for their modes: 1 in automatic, 0 in manual. */
+/**
+ * Words controllers and historians write for their modes: 1 in automatic, 0 in manual. LO is not among them: in a
+ * measurement it says below range, and a zero there would be a value nobody measured.
+ */
 const modes: ReadonlyMap<string, number> = new Map([
   ...['auto', 'automatic', 'aut', 'cas', 'cascade', 'rcas'].map((word) => [word, 1] as const),
-  ...['man', 'manual', 'rout', 'iman', 'lo'].map((word) => [word, 0] as const),
+  ...['man', 'manual', 'rout', 'iman'].map((word) => [word, 0] as const),
 ]);
 
 /**

@@ -24,4 +24,14 @@ describe('the guessed plan', () => {
     });
     expect(planOf('time,source,figure', (i) => `Badger pump flow,${i}`).form).toBe('long');
   });
+
+  it.each(['Good', '"Good, non-specific"', 'Uncertain'])('takes no column of “%s” for tag names', (word) => {
+    expect(planOf('time,FT-1,FT-1 quality', (i) => `${i},${word}`).form).toBe('wide');
+  });
+
+  it('doubts times that hold no time of day', () => {
+    const doubtsOf = (time: string) => guessPlan(`Date,FT-1\n${time},1\n${time},2\n`, 'UTC').doubts;
+    expect(doubtsOf('2026-03-01').join()).toContain('no time of day');
+    expect(doubtsOf('2026-03-01 06:00').join()).not.toContain('no time of day');
+  });
 });

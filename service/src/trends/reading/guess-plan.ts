@@ -115,6 +115,10 @@ function timeColumn(
       );
     if (!format.startsWith('epoch') && !cells.some((cell) => /(Z|UTC|[+-]\d{2}:?\d{2})$/i.test(cell.trim())))
       doubts.push(`The times name no zone; they are read as local time in ${zone}.`);
+    if (!format.startsWith('epoch') && !cells.some((cell) => /\d:\d\d/.test(cell)))
+      doubts.push(
+        'The times hold a date and no time of day. Where the time of day stands in a column of its own, all rows of a day would fall on one instant: join the two columns before bringing the file in.',
+      );
     return { index, format };
   }
   return null;
@@ -151,7 +155,11 @@ const valueNames = /^(value|val|reading|data)$/i;
 /** What historians write in place of a value: a column of nothing else is a dead signal, not a column of tags. */
 const noValue =
   /^(\W*|[\W\d]*(bad|nan|null|none|n\/?a|no ?(data|good|value)|not connected|err(or)?|fail(ed|ure)?|invalid|i\/o timeout|time ?out|pt created|comm ?fail|shutdown|scan off|arc off-?line)\b.*)$/i;
+/** Words of a quality column: whether a value can be trusted, never whose it is. */
+const qualityWord = /^(good|ok|uncertain|questionable)(,.*)?$/i;
 const qualityNames = /^(quality|status|q|confidence|opc ?quality)$/i;
+
+const saysNoTag = (cell: string) => noValue.test(cell) || qualityWord.test(cell.trim());
 
 /** The columns of the long form: one of tag names, one of values, perhaps one of qualities. */
 function longColumns(
@@ -166,7 +174,7 @@ function longColumns(
   // Without a name that says so, one column of figures beside the names is what tells the long form.
   const plain = header.flatMap((name, i) => (i === time || qualityNames.test(name) ? [] : [i]));
   if (tag < 0 && header.length <= 5 && plain.filter((i) => !isText(i)).length === 1)
-    tag = plain.find((i) => isText(i) && !rows.every((row) => noValue.test(row[i] ?? ''))) ?? -1;
+    tag = plain.find((i) => isText(i) && !rows.every((row) => saysNoTag(row[i] ?? ''))) ?? -1;
   if (tag < 0) return null;
   let value = named(valueNames);
   if (value < 0)

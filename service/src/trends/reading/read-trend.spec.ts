@@ -109,6 +109,19 @@ describe('reading a trend file', () => {
     expect(steps).toEqual([0, 1740, 60, 1800, 1800]);
   });
 
+  it('puts all cells of one row at one time in the repeated hour, whichever cells stay empty', async () => {
+    const rows = ['02:10:00,1,1', '02:50:00,2,', '02:10:00,3,', '02:50:00,4,4', '03:10:00,5,5'];
+    const { times, values } = await read(
+      `time,A,B\n${rows.map((row) => `2026-10-25 ${row}`).join('\n')}\n`,
+      {},
+      'Europe/Vienna',
+    );
+    expect(values('B')).toEqual([1, 4, 5]);
+    const timeOfFour = times('A')[values('A').indexOf(4)];
+    expect(timeOfFour).toBe(Date.parse('2026-10-25T01:50:00Z') / 1000);
+    expect(times('B')[1]).toBe(timeOfFour);
+  });
+
   it('counts what it rejects by reason, with line numbers', async () => {
     const { report } = await read(
       'time,A\n2026-01-01T00:00:00Z,1\nsoon,2\n2026-01-01T00:00:10Z,1.2.3\n2026-01-01T00:00:20Z,4\n',
@@ -144,6 +157,11 @@ describe('a trend file that cannot be used', () => {
     [
       'goes back in time',
       'time,A\n2026-01-02T00:00:00Z,1\n2026-01-02T00:00:10Z,2\n2026-01-01T00:00:00Z,3\n',
+      'timeGoesBack',
+    ],
+    [
+      'goes back in time from the cells of one tag to those of another',
+      'time,A,B\n2026-01-02T00:00:00Z,1,\n2026-01-02T00:00:10Z,2,\n2026-01-01T00:00:00Z,,3\n',
       'timeGoesBack',
     ],
     [

@@ -9,6 +9,7 @@ import { Rejects } from './rejects.js';
 import { stampReader, type Stamp } from './stamp.js';
 import { type Columns, findColumns } from './tag-columns.js';
 import { TagSamples } from './tag-samples.js';
+import { TimeOrder } from './time-order.js';
 
 export interface ReadOptions {
   readonly path: string;
@@ -53,6 +54,8 @@ class Reading {
   full: TagSamples[] = [];
   private columns: Columns | null = null;
   private readonly stamp: (text: string) => Stamp;
+  /** the order of rows: in a wide file they share one time, whichever of their cells are empty */
+  private readonly rowOrder = new TimeOrder();
   private readonly tags = new Map<string, TagSamples>();
   private readonly leftInFile = new Set<string>();
   private readonly rejects = new Rejects();
@@ -121,13 +124,14 @@ class Reading {
   }
 
   private wideRow({ cells, line }: Row, stamp: Extract<Stamp, { kind: 'time' }>, columns: Columns) {
+    const time = this.inOrder(this.rowOrder, stamp, line);
     for (const { tag, index } of columns.tags) {
       const cell = cells[index];
       // In a wide file an empty cell is no sample of this tag at this time: neither zero nor bad.
       if (cell === undefined || cell.trim() === '') continue;
       const samples = this.samplesOf(tag);
       if (samples)
-        this.sample(samples, stamp, { cell, line, column: columns.header[index] ?? tag, good: true });
+        this.sample(samples, time, { cell, line, column: columns.header[index] ?? tag, good: true });
     }
   }
 
@@ -146,7 +150,8 @@ class Reading {
     if (!samples) return;
     const quality = long.quality === null ? '' : (cells[long.quality] ?? '');
     const good = qualityIsGood(quality, this.options.plan.uncertainIsGood);
-    this.sample(samples, stamp, {
+    const time = this.inOrder(samples.order, stamp, line);
+    this.sample(samples, time, {
       cell,
       line,
       column: this.options.plan.long?.valueColumn ?? '',
@@ -156,10 +161,9 @@ class Reading {
 
   private sample(
     samples: TagSamples,
-    stamp: Extract<Stamp, { kind: 'time' }>,
+    time: number,
     { cell, line, column, good }: { cell: string; line: number; column: string; good: boolean },
   ): void {
-    const time = this.inOrder(samples, stamp, line);
     const read = cellValue(cell, this.options.plan.decimalMark);
     if (read.kind === 'other mark')
       throw Refusal.because('mixedDecimalMarks', line, column, cell.trim(), this.options.plan.decimalMark);
@@ -172,22 +176,10 @@ class Reading {
     if (samples.full) this.full.push(samples);
   }
 
-  /** The stamp's instant in the order of its tag: the second reading of a repeated hour once the first has passed. */
-  private inOrder(
-    samples: TagSamples,
-    { first, second }: Extract<Stamp, { kind: 'time' }>,
-    line: number,
-  ): number {
-    const { former, direction } = samples;
-    const follows = (time: number) =>
-      Number.isNaN(former) || (direction < 0 ? time <= former : time >= former);
-    // Of the two readings of a repeated hour, the one the order of the file comes to first.
-    const [nearer, farther] = direction < 0 ? [second, first] : [first, second];
-    const time = Number.isNaN(second) || follows(nearer) ? (Number.isNaN(nearer) ? first : nearer) : farther;
-    if (samples.direction === 0 && time !== former && !Number.isNaN(former))
-      samples.direction = time > former ? 1 : -1;
-    if ((time - former) * samples.direction < 0) this.refuseOrder(former, time, line);
-    samples.former = time;
+  private inOrder(order: TimeOrder, stamp: Extract<Stamp, { kind: 'time' }>, line: number): number {
+    const { former } = order;
+    const time = order.place(stamp);
+    if ((time - former) * order.direction < 0) this.refuseOrder(former, time, line);
     return time;
   }
 
@@ -224,7 +216,8 @@ class Reading {
       this.leftInFile.add(tag);
       return null;
     }
-    const samples = new TagSamples(tag, this.options.batch ?? 16_384);
+    const order = this.options.plan.form === 'wide' ? this.rowOrder : new TimeOrder();
+    const samples = new TagSamples(tag, this.options.batch ?? 16_384, order);
     this.tags.set(tag, samples);
     return samples;
   }

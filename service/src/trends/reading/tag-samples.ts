@@ -1,4 +1,5 @@
 import { type Series } from '@tailrace/shared/core/series';
+import { type TimeOrder } from './time-order.js';
 
 /**
  * The samples of one tag as they are read, in columns that are handed on whenever they are full. The buffers are
@@ -9,10 +10,6 @@ export class TagSamples {
   private readonly value: Float64Array;
   private readonly good: Uint8Array;
   private count = 0;
-  /** s UTC of the sample before, in file order */
-  former = NaN;
-  /** 1 for a file in order of time, −1 for newest first, 0 while that is open */
-  direction: -1 | 0 | 1 = 0;
   taken = 0;
   bad = 0;
   from = Infinity;
@@ -21,6 +18,8 @@ export class TagSamples {
   constructor(
     readonly tag: string,
     private readonly capacity: number,
+    /** the tag's own, or in a wide file the one all tags share */
+    readonly order: TimeOrder,
   ) {
     this.time = new Float64Array(capacity);
     this.value = new Float64Array(capacity);
@@ -51,12 +50,12 @@ export class TagSamples {
     const time = this.time.slice(0, n);
     const value = this.value.slice(0, n);
     const good = this.good.slice(0, n);
-    if (this.direction < 0) {
+    if (this.order.direction < 0) {
       time.reverse();
       value.reverse();
       good.reverse();
     }
-    return onePerTime({ time, value, good }, this.direction < 0);
+    return onePerTime({ time, value, good }, this.order.direction < 0);
   }
 }
 
