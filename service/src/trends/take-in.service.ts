@@ -74,14 +74,26 @@ export class TakeInService implements OnModuleInit, OnModuleDestroy {
     const file = await this.database.getRepository(TrendFileEntity).findOneByOrFail({ id: fileId });
     if (!file.plan) throw new Error(`trend file ${file.number} has no plan`);
     const { port1, port2 } = new MessageChannel();
+    // What cannot be stored ends the reading too: its thread waits for "go on" and would wait for ever.
+    const unstored = new AbortController();
     let storing: Promise<void> = Promise.resolve();
     port1.on('message', (message: ReadMessage) => {
       storing = storing.then(() => this.hear(fileId, message, () => port1.postMessage('go on')));
+      storing.catch((error: unknown) => unstored.abort(error));
     });
     const task = { path: this.files.path(fileId), plan: file.plan, wanted, port: port2 };
-    const outcome = (await this.pool.run(task, { transferList: [port2] })) as ReadOutcome;
+    let outcome: ReadOutcome;
+    try {
+      outcome = (await this.pool.run(task, {
+        transferList: [port2],
+        signal: unstored.signal,
+      })) as ReadOutcome;
+    } catch (error) {
+      throw unstored.signal.aborted ? unstored.signal.reason : error;
+    } finally {
+      port1.close();
+    }
     await storing;
-    port1.close();
     if (outcome.kind === 'refused') await this.refuse(file, outcome.sentence);
     else if (outcome.report.tags.length === 0) await this.refuse(file, trendRefusals.nothingWanted());
     else await this.finish(file, outcome.report);
