@@ -1,79 +1,56 @@
 import { writeFileSync } from 'node:fs';
+import { stdout } from 'node:process';
 import { fileURLToPath } from 'node:url';
 import { parseArgs } from 'node:util';
-import { type Family } from './family.js';
-import { faulty, healthy } from './families.js';
-import { type FamilyResult, runFamily } from './run-family.js';
+import { barRow, bars } from './bars.js';
+import { chapters, families } from './families.js';
+import { runFamilies } from './run-families.js';
+import { tableHead, tableRow } from './table.js';
 
 /**
- * Scenario families with known truth through the core. `--seeds N` loops a family (20), `--family TEXT` those whose
- * name holds it, `--write` keeps the table in RESULTS.md.
+ * Scenario families with known truth through the core. `--seeds N` valves a family (20), `--family TEXT` those whose
+ * name holds it, `--jobs N` processes (2), `--write` keeps the tables in RESULTS.md. Exit code 0 whatever is
+ * missed: the table is read, not gated.
  */
 const { values } = parseArgs({
   options: {
     seeds: { type: 'string', default: '20' },
     family: { type: 'string', default: '' },
+    jobs: { type: 'string', default: '2' },
     write: { type: 'boolean', default: false },
   },
 });
-const seeds = Number(values.seeds);
+const say = (text: string) => void stdout.write(`${text}\n`);
 
-const header = [
-  '| family | loops | found | unrelated | kind right / wrong | error of the figure |',
-  '| --- | --- | --- | --- | --- | --- |',
+const chosen = families.filter(({ name }) => name.includes(values.family));
+const rows = new Map<string, string>();
+say(tableHead.join('\n'));
+const results = await runFamilies(
+  chosen,
+  { seeds: Number(values.seeds), jobs: Number(values.jobs) },
+  (family, own) => {
+    rows.set(family.name, tableRow(family, own));
+    say(tableRow(family, own));
+  },
+);
+
+const barTable = [
+  '| promise | valves | asked | measured | |',
+  '| --- | --- | --- | --- | --- |',
+  ...bars.flatMap((bar) => barRow(bar, results)?.text ?? []),
 ];
-
-function row(result: FamilyResult, isHealthy: boolean): string {
-  const { name, figure, unrelatedKinds, kinds } = result;
-  const odd = unrelatedKinds.length > 0 ? ` (${unrelatedKinds.join(', ')})` : '';
-  const error = figure
-    ? `${figure.name}: rms ${figure.rms.toFixed(2)}, worst ${figure.worst.toFixed(2)}, known in ${figure.known}`
-    : '';
-  return `| ${name} | ${result.seeds} | ${isHealthy ? '–' : result.found} | ${result.unrelated}${odd} | ${kinds.right} / ${kinds.wrong} | ${error} |`;
-}
-
-function table(
-  title: string,
-  families: readonly Family[],
-  isHealthy: boolean,
-): { text: string; results: FamilyResult[] } {
-  const lines = [`## ${title}`, '', ...header];
-  console.log(lines.join('\n'));
-  const results: FamilyResult[] = [];
-  for (const family of families.filter(({ name }) => name.includes(values.family))) {
-    const result = runFamily(family, seeds);
-    results.push(result);
-    lines.push(row(result, isHealthy));
-    console.log(lines.at(-1));
-  }
-  console.log('');
-  return { text: `${lines.join('\n')}\n`, results };
-}
-
-const well = table('Healthy valves', healthy, true);
-const ill = table('Valves with one thing wrong', faulty, false);
-const count = (results: readonly FamilyResult[], of: (result: FamilyResult) => number) =>
-  results.reduce((sum, result) => sum + of(result), 0);
-const summary = [
-  `Healthy valves with a finding other than Uneven gain: ${count(well.results, (r) => r.unrelated)} of ${count(well.results, (r) => r.seeds)}.`,
-  `Faults found: ${count(ill.results, (r) => r.found)} of ${count(ill.results, (r) => r.seeds)}; valves with an unrelated finding: ${count(ill.results, (r) => r.unrelated)}.`,
-  `Kinds named wrongly: ${count([...well.results, ...ill.results], (r) => r.kinds.wrong)} of ${count([...well.results, ...ill.results], (r) => r.seeds)}.`,
-].join('\n');
-console.log(summary);
+say(`\n${barTable.join('\n')}`);
 
 if (values.write) {
-  const head = `# How well the core does\n\nSimulated closed loops with known truth (\`shared/src/simulation\`); \`npm run accuracy -- --write\` writes this page. Each loop of a family has another valve size, rangeability, line, noise and disturbance; seeds are fixed. It is a simulation by the authors of the rules: it bounds what is reachable and does not prove plant performance.\n`;
-  const path = fileURLToPath(new URL('RESULTS.md', import.meta.url));
-  writeFileSync(
-    path,
-    [
-      head,
-      well.text,
-      ill.text,
-      `${summary
-        .split('\n')
-        .map((l) => `- ${l}`)
-        .join('\n')}\n`,
-    ].join('\n'),
-  );
+  const page = [
+    '# How well the core does',
+    'Simulated closed loops with known truth (`shared/src/simulation`); `npm run accuracy -- --write` writes this page. Every seed of a family is another valve: size, rangeability, line, noise, positioner and errors of the instruments differ; seeds are fixed. Unless a family says otherwise: fourteen days at 10 s, a trim that departs smoothly from its law (sd 2 %), swinging-door archive, one shutdown, 0.05 % bad values. “Found” counts the sought finding; “unrelated” counts valves with a finding that is neither sought nor a consequence, Uneven gain apart. Errors of capacity are against the trim’s law, so its 2 % departure counts as error. It is a simulation by the authors of the rules: it bounds what is reachable and does not prove plant performance.',
+    '## What is promised',
+    barTable.join('\n'),
+    ...chapters.flatMap(({ title, families: own }) => {
+      const lines = own.flatMap(({ name }) => rows.get(name) ?? []);
+      return lines.length === 0 ? [] : [`## ${title}`, [...tableHead, ...lines].join('\n')];
+    }),
+  ];
+  writeFileSync(fileURLToPath(new URL('RESULTS.md', import.meta.url)), `${page.join('\n\n')}\n`);
 }

@@ -41,7 +41,11 @@ export function readBy(history: History, instruments: Instruments, seed: number)
         return { ...series, value: series.value.map((v) => v + instruments.upstreamError) };
       case 'downstreamPressure':
         return { ...series, value: series.value.map((v) => v + instruments.downstreamError) };
-      default:
+      case 'demand':
+      case 'position':
+      case 'temperature':
+      case 'density':
+      case 'mode':
         return series;
     }
   };
