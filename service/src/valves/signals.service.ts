@@ -5,6 +5,7 @@ import { randomUUID } from 'node:crypto';
 import { EntityManager } from 'typeorm';
 import { AuditService } from '../audit/audit.service.js';
 import { Problem } from '../platform/problem.js';
+import { refuseForeignTags } from './foreign-tags.js';
 import { SignalEntity } from './signal.entity.js';
 import { ValveEntity } from './valve.entity.js';
 
@@ -32,6 +33,7 @@ export class SignalsService {
     const after = { historianTag: binding.historianTag, unit: binding.unit, reversed: binding.reversed };
     if (before && sameSignal(before, after)) return;
     if (before && !may(actor, 'valves:write', valve.areaId)) throw new Problem('wrong-state', 'signal-bound');
+    await refuseForeignTags(manager, actor, [binding.historianTag]);
     if (before) await manager.update(SignalEntity, { id: before.id }, after);
     else await manager.insert(SignalEntity, { id: randomUUID(), valveId, role, ...after });
     await manager.increment(ValveEntity, { id: valveId }, 'version', 1);

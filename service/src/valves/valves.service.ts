@@ -16,6 +16,7 @@ import { Clock } from '../platform/clock.js';
 import { Transactions } from '../platform/database/transactions.js';
 import { Problem } from '../platform/problem.js';
 import { DataSheetEntity } from './data-sheet.entity.js';
+import { refuseForeignTags } from './foreign-tags.js';
 import { presentValve, presentValveRow, valveFormOf } from './present-valve.js';
 import { SignalEntity } from './signal.entity.js';
 import { ValveEntity } from './valve.entity.js';
@@ -83,6 +84,7 @@ export class ValvesService {
     return this.transactions.run(async (manager) => {
       await this.ownArea(manager, actor, draft.areaId);
       await this.tagIsFree(manager, draft.tag, null);
+      await refuseForeignTags(manager, actor, tagsOf(draft));
       const now = this.clock.now();
       const id = randomUUID();
       await manager.insert(ValveEntity, {
@@ -114,6 +116,7 @@ export class ValvesService {
       if (changed.affected !== 1) throw new Problem('edited-meanwhile');
       if (JSON.stringify(valveFormOf(before).dataSheet) !== JSON.stringify(draft.dataSheet))
         await this.writeSheet(manager, actor, before.id, draft);
+      await refuseForeignTags(manager, actor, tagsOf(draft));
       await manager.delete(SignalEntity, { valveId: before.id });
       await this.writeSignals(manager, before.id, draft);
       const valve = await this.byId(actor, before.id, manager);
@@ -203,4 +206,8 @@ export class ValvesService {
       after: { ...valveFormOf(valve), areaId: valve.areaId },
     });
   }
+}
+
+function tagsOf({ signals }: ValveDraft): string[] {
+  return Object.values(signals).map(({ tag }) => tag);
 }

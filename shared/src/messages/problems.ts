@@ -25,6 +25,8 @@ const details = {
   'tag-taken': 'A valve with this tag is in the register already. Use another tag, or open that valve.',
   'signal-bound':
     'This valve already has another tag for this role. An engineer can change it on the valve’s page.',
+  'tag-elsewhere':
+    'One of these historian tags belongs to a valve outside your areas. Somebody who sees both areas can bind it.',
   'no-such-route': 'There is no such address in the API. The list of them is at /api/docs.',
   'body-not-json': 'The body is not valid JSON.',
   'body-too-large': 'The body is larger than the 1 MB allowed here. Files go to /api/trends.',
