@@ -74,7 +74,7 @@ export const bars: readonly Bar[] = [
     need: { atLeast: 0.9 },
   },
   {
-    promise: 'kind right, duty over 55 %',
+    promise: 'kind right, span from 40 %',
     about: spanning(40, 100),
     measure: shareOf(({ kind }) => kind === 'right'),
     need: { atLeast: 0.95 },
@@ -151,6 +151,7 @@ export const bars: readonly Bar[] = [
   found('Position mismatch of 3 %', 0.98, 'position reads'),
   near('mismatch within 0.3 % travel', 0.3, 0.98, 'position reads'),
   found('frozen for a day', 0.98, 'flow frozen', 'position frozen'),
+  found('Excess movement, period below 4 scans', 0.95, 'controller'),
   found('Choked service', 0.98, 'choked'),
 ];
 

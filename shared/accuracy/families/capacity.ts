@@ -3,7 +3,7 @@ import { type Family } from '../family.js';
 import { capacity, change, shift, trend } from './figures.js';
 import { day, linear, steps, together, trim, valve } from './parts.js';
 
-const months = () => ({ days: 36, shutdowns: [] });
+const months = () => ({ days: 72, shutdowns: [] });
 const against = (stated: number): Partial<Family> => ({
   sheet: ({ valve: { ratedCoefficient } }) => ({ ratedCoefficient: ratedCoefficient / stated }),
   figure: capacity(stated),
@@ -43,35 +43,35 @@ export const capacities: readonly Family[] = [
     name: 'wear +10 % in twelve months',
     sought: ['Gained capacity'],
     loop: together(valve({ drift: 0.1 }), months),
-    daysAMonth: 3,
+    daysAMonth: 6,
     figure: trend(1.1),
   },
   {
     name: 'fouling -10 % in twelve months',
     sought: ['Lost capacity'],
     loop: together(valve({ drift: -0.1 }), months),
-    daysAMonth: 3,
+    daysAMonth: 6,
     figure: trend(0.9),
   },
   {
     name: 'wear +4 % in twelve months',
     sought: ['Gained capacity'],
     loop: together(valve({ drift: 0.04 }), months),
-    daysAMonth: 3,
+    daysAMonth: 6,
     figure: trend(1.04),
   },
   {
     name: 'fouling -4 % in twelve months',
     sought: ['Lost capacity'],
     loop: together(valve({ drift: -0.04 }), months),
-    daysAMonth: 3,
+    daysAMonth: 6,
     figure: trend(0.96),
   },
   {
     name: 'step -6 % in month 7',
     sought: ['Lost capacity'],
-    loop: together(valve({ step: { at: 19 * day, factor: 0.94 } }), months),
-    daysAMonth: 3,
+    loop: together(valve({ step: { at: 37 * day, factor: 0.94 } }), months),
+    daysAMonth: 6,
     figure: change(0.94),
   },
   {

@@ -54,7 +54,7 @@ export const healthy: readonly Family[] = [
   ),
   healthyFamily('coarse archive', historian({ tolerance: 0.004 }), capacity()),
   healthyFamily('every scan kept', historian({ tolerance: 0 }), capacity()),
-  healthyFamily('noisy meter', () => ({ meterNoise: 0.02 }), capacity()),
+  healthyFamily('noisy meter, slow controller', () => ({ meterNoise: 0.02, tuning: 0.2 }), capacity()),
   healthyFamily('disturbances of 10 %', line({ disturbance: 0.1 }), capacity()),
   healthyFamily('trim 3.5 % off its law', valve({ ripple: 0.035 }), capacity()),
   healthyFamily('gas', () => ({}), capacity(), { gas: air }),
@@ -86,11 +86,11 @@ export const healthy: readonly Family[] = [
     together(valve(trim('modified parabolic')), () => ({ duty: steps(15, 60) })),
     capacity(),
   ),
-  healthyFamily('twelve months', () => ({ days: 36, shutdowns: [] }), change(1), { daysAMonth: 3 }),
+  healthyFamily('twelve months', () => ({ days: 72, shutdowns: [] }), change(1), { daysAMonth: 6 }),
   healthyFamily(
     'twelve months, linear',
-    together(valve(linear), () => ({ days: 36, shutdowns: [] })),
+    together(valve(linear), () => ({ days: 72, shutdowns: [] })),
     change(1),
-    { daysAMonth: 3 },
+    { daysAMonth: 6 },
   ),
 ];

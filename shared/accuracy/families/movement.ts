@@ -94,7 +94,7 @@ const lost: readonly Family[] = [
 ];
 
 const swinging: readonly Family[] = [
-  [60, 3],
+  [60, 6],
   [150, 3],
   [600, 5],
   [1_200, 2],
@@ -111,7 +111,10 @@ const swinging: readonly Family[] = [
 /** Valves that stick, lose motion, swing or report a wrong position (methods.md §12.3). */
 export const movements: readonly Family[] = [
   ...sticking.map((family): Family => ({ ...family, related: ['Hunting', 'Excess movement'] })),
-  ...lost.map((family): Family => ({ ...family, related: ['Hunting', 'Excess movement'] })),
+  ...lost.map(
+    // a dead band keeps the stem off its seat when told to shut: what passes then is true
+    (family): Family => ({ ...family, related: ['Hunting', 'Excess movement', 'Passing when shut'] }),
+  ),
   ...swinging,
   {
     name: 'swings 3 % every 600 s, scan 60 s',
@@ -121,9 +124,10 @@ export const movements: readonly Family[] = [
     figure: period(600),
   },
   {
-    name: 'controller too fast',
-    sought: ['Hunting'],
-    related: ['Excess movement'],
+    // it swings faster than four scans: no period can be told (methods.md §12.4)
+    name: 'controller too fast for the scan',
+    sought: ['Excess movement'],
+    related: ['Hunting'],
     loop: () => ({ tuning: 8 }),
   },
   {

@@ -13,7 +13,7 @@ export interface Keeping {
   readonly span: (role: SignalRole) => number;
 }
 
-/** What a historian keeps of a history recorded scan by scan; a hole in its times ends a segment. */
+/** What a historian keeps of a history recorded scan by scan; a hole in its times is kept as a hole. */
 export function archiveHistory(history: History, { scan, tolerance, longest, span }: Keeping): History {
   const stepped = (role: SignalRole) => role === 'mode' || role === 'setPoint';
   return mapSeries(history, (role, series) => {
@@ -28,6 +28,7 @@ export function archiveHistory(history: History, { scan, tolerance, longest, spa
       spells(series, scan).map(({ from, to }) =>
         archive(series.time[from] as number, series.value.subarray(from, to), settings),
       ),
+      scan,
     );
   });
 }
@@ -44,20 +45,26 @@ function spells({ time }: Series, scan: number): { from: number; to: number }[] 
   return found;
 }
 
-function joined(parts: readonly Series[]): Series {
-  const count = parts.reduce((sum, { time }) => sum + time.length, 0);
+/** Spells one after the other; a collection that stops says so by a value it does not vouch for. */
+function joined(parts: readonly Series[], scan: number): Series {
+  const stops = Math.max(0, parts.length - 1);
+  const count = parts.reduce((sum, { time }) => sum + time.length, stops);
   const whole = {
     time: new Float64Array(count),
     value: new Float64Array(count),
     good: new Uint8Array(count),
   };
   let at = 0;
-  for (const part of parts) {
+  parts.forEach((part, i) => {
     whole.time.set(part.time, at);
     whole.value.set(part.value, at);
     whole.good.set(part.good, at);
     at += part.time.length;
-  }
+    if (i === stops) return;
+    whole.time[at] = (part.time.at(-1) ?? NaN) + scan;
+    whole.value[at] = NaN;
+    at++;
+  });
   return whole;
 }
 
