@@ -28,14 +28,6 @@ const turns = 4;
 /** Slow is judged over at least this many scans. */
 const slowScans = 3;
 const looksBack = 6;
-/**
- * A controller answers what its meter says, noise and all: at the furthest point of a run upwards the meter just
- * read low. Flow is therefore looked at this much later (s), where that noise is gone and the stem has come back
- * by no more than `leadRetreat` (% of the reference). On simulated healthy loops with 1.5 % of noise the split then
- * reads 0.7 to 1.3 % of play instead of 2.4.
- */
-const leadSeconds = 10;
-const leadRetreat = 1;
 
 /** Room for the samples of a split of a record of this many grid points; reused between its splits. */
 export function slowSamplesFor(count: number): SlowSamples {
@@ -57,8 +49,7 @@ export function slowSamplesFor(count: number): SlowSamples {
  *
  * Only slow samples count: a lag makes a loop that grows with speed, a dead band does not. A sample counts only
  * where the reference is at its furthest point since the reversal (within `directionRetreat`): once it has come
- * back a little the response rests inside its band, which read 5 to 15 % too small in the handbook's trial. A flow
- * (slope not known beforehand) is read a little later, free of the noise its controller was answering.
+ * back a little the response rests inside its band, which read 5 to 15 % too small in the handbook's trial.
  *
  * @returns dead band in % of the reference; a refusal where too few slow samples follow both directions
  * Source: methods.md §6.3
@@ -96,7 +87,7 @@ export function directionSplit(
 
 /** Slow samples at their furthest point, with how far the reference had come since it turned. */
 function slowSamples(
-  { reference, responseAt, legs, slope, binnedBy = reference, engaged }: SplitPair,
+  { reference, responseAt, legs, binnedBy = reference, engaged }: SplitPair,
   grid: Grid,
   stride: number,
   limits: Limits,
@@ -107,7 +98,6 @@ function slowSamples(
   const back = Math.max(1, Math.round(Math.max(rules.slowSeconds, slowScans * grid.step) / grid.step));
   // looked at between as well: a quick oscillation would pass for rest at its turning points
   const between = Math.max(1, Math.floor(back / looksBack));
-  const lead = slope === null ? Math.round(leadSeconds / grid.step) : 0;
   let n = 0;
   let seen = 0;
   let slow = 0;
@@ -127,11 +117,8 @@ function slowSamples(
       const reach = Math.abs(furthest - pivot);
       if (reach <= rules.directionNeed || Math.abs(furthest - r) > rules.directionRetreat) continue;
       if (engaged !== undefined && !engaged(i, up)) continue;
-      const at = i + lead;
-      if (at >= grid.count) continue;
-      if (lead > 0 && Math.abs(furthest - (reference[at] as number)) > leadRetreat) continue;
-      const y = responseAt(at);
-      const place = binnedBy[at] as number;
+      const y = responseAt(i);
+      const place = binnedBy[i] as number;
       if (!Number.isFinite(y + place) || n >= room.reference.length) continue;
       room.reference[n] = place;
       room.response[n] = y;
