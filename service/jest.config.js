@@ -18,7 +18,6 @@ const esmOnly = [
   'file-type',
   'load-esm',
   'csv-parse',
-  'simple-statistics',
   'uint8array-extras',
   'strtok3',
   'token-types',
@@ -34,7 +33,6 @@ const esmOnly = [
   'd3-time',
   'd3-time-format',
   'internmap',
-  'ml-.*',
 ];
 
 export default {
