@@ -21,6 +21,8 @@ export const operations: readonly Family[] = [
   {
     name: 'oversized 8 to 18 %',
     sought: ['Oversized'],
+    // so low in a wide meter range its noise does move the stem
+    related: ['Excess movement'],
     loop: () => ({ duty: steps(8, 18) }),
     figure: travel,
   },

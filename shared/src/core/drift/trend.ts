@@ -30,7 +30,7 @@ export function trendOf(
 ): Exclude<Drift['trend'], { judged: false }> {
   const { time, change: y } = points;
   const n = y.length;
-  const length = (time[n - 1] as number) - (time[0] as number);
+  const length = recordLength(time);
   const line = theilSen(time, y);
   const { p } = correctedTrendTest(time, y);
   const change = line.slope * length;
@@ -57,8 +57,17 @@ function standardError({ time, change }: Points, slope: number, intercept: numbe
   const mean = time.reduce((sum, t) => sum + t, 0) / n;
   const rest = change.map((y, i) => y - intercept - slope * (time[i] as number));
   const about = time.reduce((sum, t) => sum + (t - mean) ** 2, 0);
-  const length = (time[n - 1] as number) - (time[0] as number);
+  const length = recordLength(time);
   return (restSpread(rest, 2) * persistenceFactor(persistence(rest, 2)) * length) / Math.sqrt(about);
+}
+
+/**
+ * Length of the record that points stand for, s: each is the middle of its period, so half a period lies before the
+ * first and after the last. Without them a year by months shows eleven twelfths of its change.
+ */
+function recordLength(time: readonly number[]): number {
+  const n = time.length;
+  return (((time[n - 1] as number) - (time[0] as number)) * n) / (n - 1);
 }
 
 /** Standard deviation of neighbouring differences over √2. */
