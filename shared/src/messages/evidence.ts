@@ -38,6 +38,7 @@ const known: Readonly<Record<string, readonly [name: string, write: Write]>> = {
   shift: ['travel shift', inTravel],
   reading: ['travel reported', inTravel],
   worstTravel: ['worst at', inTravel],
+  worstPercent: ['deviation there', (value) => `${number(value)}\u00a0%`],
   lowestBeyond: ['beyond tolerance from', inTravel],
   highestBeyond: ['to', inTravel],
   binsBeyond: ['bins beyond tolerance', plain],

@@ -55,7 +55,11 @@ const words: Record<FindingKind, FindingWords> = {
   },
   'Off characteristic': {
     figure: (f) =>
-      `up to ${share(Math.exp(f.x) - 1)} away from the specified characteristic${give(f, 'worstTravel', (v) => `, worst at ${travel(v)} travel`)}`,
+      `up to ${
+        known(f, 'worstPercent')
+          ? `${share(Math.abs(evidence(f, 'worstPercent')) / 100)} ${evidence(f, 'worstPercent') < 0 ? 'below' : 'above'}`
+          : `${share(Math.exp(f.x) - 1)} away from`
+      } the specified characteristic${give(f, 'worstTravel', (v) => `, at ${travel(v)} travel`)}`,
     nextStep:
       'Check the data sheet and the positioner’s characterisation first; then plan an inspection of the trim.',
     doubts: [

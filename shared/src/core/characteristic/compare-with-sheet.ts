@@ -86,7 +86,9 @@ function deviationFrom(
     const percent = 100 * Math.expm1(shape);
     byTravel.push({ travel: 100 * h, percent, tolerance: coefficientTolerance(phi) });
     if (100 * h < limits.comparison.leastTravel) continue;
-    if (worst === null || Math.abs(percent) > Math.abs(worst.percent)) worst = { travel: 100 * h, percent };
+    // By ratio: half the specified coefficient is as far away as twice it.
+    if (worst === null || Math.abs(shape) > Math.abs(Math.log1p(worst.percent / 100)))
+      worst = { travel: 100 * h, percent };
   }
   const spread = 196 * fit.shiftError;
   return {

@@ -37,6 +37,7 @@ export const offCharacteristic: FindingRule = {
         rests: { onPosition: true, onPressures: true },
         evidence: {
           worstTravel: deviation.worst?.travel ?? null,
+          worstPercent: deviation.worst?.percent ?? null,
           binsBeyond: beyond.length,
           bins: bins.length,
           capacityRatio: deviation.capacityRatio?.value ?? null,
