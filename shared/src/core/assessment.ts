@@ -166,6 +166,8 @@ export interface DirectionSplit {
   /** dead band, % travel */
   readonly deadBand: number;
   readonly standardError: number;
+  /** what the reference moves by from scan to scan without going anywhere, % travel; absent where it asks nothing of the band */
+  readonly jitter?: number;
   readonly bins: number;
   /** mid-lines: reference value, response rising, response falling */
   readonly lines: readonly { readonly at: number; readonly up: number; readonly down: number }[];

@@ -2,6 +2,12 @@ import { type DirectionSplit } from '../assessment.js';
 import { type FindingRule, type Measure } from './finding-rule.js';
 
 /**
+ * Jitters of the stem a band to the flow must exceed. On simulated loops healthy ones read up to 5.2 of them; where
+ * jitter is above half a per cent, no play and play of 4 % read alike, so less cannot be told.
+ */
+const jitters = 5.5;
+
+/**
  * A dead band: between demand and stem without jumps, between stem and flow, or between demand and flow where the
  * position is not recorded (§6.3, §9.2). Where jumps cannot be seen, sticking is not excluded, and it says so.
  */
@@ -26,8 +32,8 @@ export const lostMotion: FindingRule = {
       rule: string,
       threshold: { readonly raise: number; readonly actNow: number },
     ): Measure => ({
-      raise: threshold.raise + without,
-      actNow: threshold.actNow + without,
+      raise: Math.max(threshold.raise + without, jitters * (split.jitter ?? 0)),
+      actNow: Math.max(threshold.actNow + without, 2 * jitters * (split.jitter ?? 0)),
       x: split.deadBand,
       rule,
       standardError: split.standardError,

@@ -82,7 +82,28 @@ export function directionSplit(
     if (wanted <= need * 1.02) break;
     need = wanted;
   }
-  return best;
+  if ('reason' in best || pair.slope !== null) return best;
+  return { ...best, jitter: jitterOf(pair.reference, grid.count) };
+}
+
+/** Second differences looked at for the jitter. */
+const jitterLooks = 20_000;
+
+/**
+ * How far a reference moves from scan to scan without going anywhere: the median size of its second differences, %.
+ *
+ * A controller answers its meter's noise, and at the furthest point of a run upwards the meter just read low: such
+ * a loop shows a band that is not there, and crosses one that is.
+ */
+function jitterOf(reference: Float64Array, count: number): number {
+  const stride = Math.max(1, Math.floor(count / jitterLooks));
+  const sizes: number[] = [];
+  for (let i = 1; i < count - 1; i += stride) {
+    const [a, b, c] = [reference[i - 1] as number, reference[i] as number, reference[i + 1] as number];
+    const size = Math.abs(a - 2 * b + c);
+    if (!Number.isNaN(size)) sizes.push(size);
+  }
+  return sizes.length === 0 ? 0 : median(sizes);
 }
 
 /** Slow samples at their furthest point, with how far the reference had come since it turned. */
