@@ -144,7 +144,7 @@ export const bars: readonly Bar[] = [
   found('dead band of 2 to 4 %', 0.98, 'dead band'),
   near('dead band within 0.5 % travel (2 %) ', 0.5, 0.98, 'dead band 2'),
   near('dead band within 0.8 % travel (4 %)', 0.8, 0.98, 'dead band 4'),
-  found('play of 2 to 4 %', 0.98, 'play '),
+  found('play of 2 to 4 %', 0.98, 'play 2', 'play 3', 'play 4'),
   near('play within 0.6 % travel', 0.6, 0.98, 'play '),
   found('oscillation from 6 scans to 4 h', 0.95, 'swings'),
   near('its period within 5 %', 5, 0.95, 'swings'),

@@ -66,6 +66,8 @@ export function plainLoop(seed: number): Loop {
       disturbance: 0.03,
     },
     meterNoise: between(0.003, 0.008),
+    // loops are slowed until their meter's noise no longer wears the stem
+    tuning: between(0.3, 0.6),
     shutdowns: [{ from: shutdown, to: shutdown + 3 * 3_600 }],
     historian: { ...plain.historian, scan: 10, tolerance: 0.001 },
   };

@@ -54,6 +54,12 @@ export const healthy: readonly Family[] = [
   ),
   healthyFamily('coarse archive', historian({ tolerance: 0.004 }), capacity()),
   healthyFamily('every scan kept', historian({ tolerance: 0 }), capacity()),
+  healthyFamily('controller that answers noise', () => ({ tuning: 1 }), capacity()),
+  healthyFamily(
+    'quick opening, controller that answers noise',
+    together(valve(trim('quick opening')), () => ({ tuning: 1 })),
+    capacity(),
+  ),
   healthyFamily('noisy meter, slow controller', () => ({ meterNoise: 0.02, tuning: 0.2 }), capacity()),
   healthyFamily('disturbances of 10 %', line({ disturbance: 0.1 }), capacity()),
   healthyFamily('trim 3.5 % off its law', valve({ ripple: 0.035 }), capacity()),

@@ -78,6 +78,12 @@ const lost: readonly Family[] = [
     figure: deadBand(2),
   },
   { name: 'play 2', sought: ['Lost motion'], loop: valve({ play: 2 }), figure: play(2) },
+  {
+    name: 'play 4, controller that answers noise',
+    sought: ['Lost motion'],
+    loop: together(valve({ play: 4 }), () => ({ tuning: 1 })),
+    figure: play(4),
+  },
   { name: 'play 4', sought: ['Lost motion'], loop: valve({ play: 4 }), figure: play(4) },
   {
     name: 'play 3 linear',

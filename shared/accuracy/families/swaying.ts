@@ -21,5 +21,5 @@ export const swaying =
       flowThrough(coefficientAt(table, travel, 0), line.dropShut, resistance, line.density);
     const { flowSpan } = simulate({ ...aLoop(), ...plain, duty, days: 0.01, shutdowns: [] });
     const swing = { period, amplitude: (flowAt(55 + amplitude) - flowAt(55 - amplitude)) / 2 / flowSpan };
-    return { duty, swing };
+    return { duty, swing, tuning: 1 };
   };
