@@ -151,7 +151,7 @@ export const bars: readonly Bar[] = [
   found('Position mismatch of 3 %', 0.98, 'position reads'),
   near('mismatch within 0.3 % travel', 0.3, 0.98, 'position reads'),
   found('frozen for a day', 0.98, 'flow frozen', 'position frozen'),
-  found('Excess movement, period below 4 scans', 0.95, 'controller'),
+  found('Excess movement, period below 4 scans', 0.95, 'controller too fast'),
   found('Choked service', 0.98, 'choked'),
 ];
 
